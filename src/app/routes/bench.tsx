@@ -1,0 +1,3 @@
+export function BenchRoute() {
+  return <main className="bench" />;
+}
