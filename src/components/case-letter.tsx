@@ -1,0 +1,53 @@
+export interface CaseLetterProps {
+  readonly letter: string;
+  /** Index of the case ink. */
+  readonly ink: number;
+  readonly size?: number;
+  readonly label?: string;
+}
+
+/** The pen square of a case: letter and ink together. */
+export function CaseLetter({ letter, ink, size = 24, label }: CaseLetterProps) {
+  return (
+    <span
+      className="case-letter"
+      style={{ width: size, height: size, fontSize: Math.max(12, size * 0.62), backgroundColor: `var(--case-${ink})` }}
+    >
+      {label && <span className="visually-hidden">{label} </span>}
+      {letter}
+    </span>
+  );
+}
+
+/** Numeral of a finding: the same one in the margin, on the tape and on the load picture. */
+export function FindingNumeral({ number, size = 22 }: { readonly number: number; readonly size?: number }) {
+  return (
+    <span className="finding-numeral" style={{ width: size, height: size }}>
+      {number}
+    </span>
+  );
+}
+
+/** The trace's own dash, for cards and legends. */
+const dashes = ['', '', '8 3', '2 3', '10 3 2 3', '10 3 2 3', '', '8 3', '2 3', '10 3 2 3'];
+const widths = [1.7, 3, 2, 2.2, 2, 1.7, 3, 2, 2.2, 2];
+
+/** Dash and width of a case's trace, by its ink: letter, ink and dash travel together. */
+export function caseStroke(ink: number): { readonly dash: readonly number[]; readonly width: number } {
+  const dash = dashes[ink] ?? '';
+  return { dash: dash === '' ? [] : dash.split(' ').map(Number), width: widths[ink] ?? 2 };
+}
+
+export function CaseDash({ ink, width = 34 }: { readonly ink: number; readonly width?: number }) {
+  const stroke = caseStroke(ink);
+  return (
+    <svg width={width} height="8" viewBox={`0 0 ${width} 8`} aria-hidden="true">
+      <path
+        d={`M0 4H${width}`}
+        stroke={`var(--case-${ink})`}
+        strokeWidth={stroke.width}
+        strokeDasharray={stroke.dash.join(' ') || undefined}
+      />
+    </svg>
+  );
+}
