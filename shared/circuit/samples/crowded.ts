@@ -30,7 +30,7 @@ import {
 export const crowdedCircuit: CircuitDocument = sample({
   title: 'Baler with side clamp and gauge panel, line 2',
   components: [
-    part('M1', 'electric-motor', [1.5, 29], {
+    part('M1', 'electric-motor', [1, 31], {
       ratedPower: kilowatts(7.5),
       ratedVoltage: volts(400),
       ratedFrequency: hertz(50),
@@ -48,7 +48,7 @@ export const crowdedCircuit: CircuitDocument = sample({
     part(
       'P1',
       'compensated-pump',
-      [12.5, 29],
+      [12, 28],
       {
         displacement: cubic(28),
         compensatorPressure: bar(190),
@@ -73,19 +73,19 @@ export const crowdedCircuit: CircuitDocument = sample({
         locked: ['minVolumeStop'],
       },
     ),
-    part('V1', 'check-valve', [19, 25]),
-    part('Z1', 'filter', [26, 23], {
+    part('V1', 'check-valve', [22, 26]),
+    part('Z1', 'filter', [27, 23], {
       ratedFlow: litres(60),
       ratedDrop: bar(1),
       bypassPressure: bar(6),
     }),
-    part('J1', 'junction', [33, 25.5], {
+    part('J1', 'junction', [37, 26], {
       shape: choice('tee'),
     }),
     part(
       'V2',
       'relief-valve',
-      [31, 29],
+      [35, 31],
       {
         type: choice('pilot'),
         setPressure: bar(225),
@@ -98,22 +98,28 @@ export const crowdedCircuit: CircuitDocument = sample({
       },
       { screws: ['setPressure'], locked: ['setPressure'] },
     ),
-    part('J2', 'junction', [39, 25.5], {
+    part('J2', 'junction', [52, 26], {
       shape: choice('tee'),
     }),
-    part('S1', 'pressure-gauge', [37, 19.5], {
-      range: bar(250),
-      lag: milliseconds(50),
-    }),
-    part('J3', 'junction', [58, 25.5], {
+    part(
+      'S1',
+      'pressure-gauge',
+      [50, 30],
+      {
+        range: bar(250),
+        lag: milliseconds(50),
+      },
+      { turn: 2 },
+    ),
+    part('J3', 'junction', [45, 26], {
       shape: choice('tee'),
     }),
-    part('V3', 'directional-valve-4-3', [52, 19], {
+    part('V3', 'directional-valve-4-3', [61, 21], {
       centre: choice('closed'),
       ratedFlow: litres(60),
       ratedDrop: bar(5),
     }),
-    part('A1', 'cylinder', [46, 4], {
+    part('A1', 'cylinder', [53, 3], {
       bore: millimetres(63),
       rod: millimetres(36),
       stroke: millimetres(500),
@@ -123,47 +129,50 @@ export const crowdedCircuit: CircuitDocument = sample({
       workForce: kilonewtons(50),
       ratedPressure: bar(250),
     }),
-    part('V5', 'directional-valve-4-3', [76, 19], {
+    part('V5', 'directional-valve-4-3', [38, 21], {
       centre: choice('closed'),
       ratedFlow: litres(60),
       ratedDrop: bar(5),
     }),
-    part('V4', 'throttle', [84, 14], {
+    part('V4', 'throttle', [34, 15], {
       opening: percent(25),
       ratedFlow: litres(60),
       ratedDrop: bar(6),
     }),
-    part('J4', 'junction', [89, 13.5], {
+    part('J4', 'junction', [68, 14], {
       shape: choice('tee'),
     }),
-    part('S2', 'pressure-gauge', [94, 10], {
-      range: bar(250),
-      lag: milliseconds(50),
-    }),
-    part('A2', 'cylinder', [78, 2], {
+    part(
+      'S2',
+      'pressure-gauge',
+      [76, 12],
+      {
+        range: bar(250),
+        lag: milliseconds(50),
+      },
+      { turn: 1 },
+    ),
+    part('A2', 'cylinder', [6, 8], {
       bore: millimetres(40),
       rod: millimetres(22),
       stroke: millimetres(200),
       mass: kilograms(25),
-      workContact: millimetres(120),
-      workFull: millimetres(160),
-      workForce: kilonewtons(15),
       ratedPressure: bar(250),
     }),
-    part('J5', 'junction', [78, 36], { shape: choice('tee') }),
-    part('S3', 'flow-meter', [82, 34], {
+    part('J5', 'junction', [70, 37], { shape: choice('tee') }),
+    part('S3', 'flow-meter', [75, 35.5], {
       ratedFlow: litres(60),
       ratedDrop: bar(1),
     }),
-    part('Z2', 'filter', [88, 33], {
+    part('Z2', 'filter', [84, 34], {
       ratedFlow: litres(60),
       ratedDrop: bar(0.5),
       bypassPressure: bar(2),
     }),
-    part('T1', 'tank', [14.8, 40]),
-    part('T2', 'tank', [19, 40]),
-    part('T3', 'tank', [31.3, 40]),
-    part('T4', 'tank', [95, 40]),
+    part('T1', 'tank', [18, 41]),
+    part('T2', 'tank', [22, 41]),
+    part('T3', 'tank', [36, 41]),
+    part('T4', 'tank', [94, 41]),
   ],
   lines: [
     pipe('L1', 'T1.T', 'P1.suction', 0.6, 32),
@@ -173,20 +182,23 @@ export const crowdedCircuit: CircuitDocument = sample({
     pipe('L5', 'Z1.B', 'J1.a', 0.3, 16),
     pipe('L6', 'J1.c', 'V2.P', 0.2, 16),
     pipe('L7', 'V2.T', 'T3.T', 1, 20),
-    pipe('L8', 'J1.b', 'J2.a', 0.3, 16),
-    pipe('L9', 'J2.c', 'S1.M', 0.5, 4),
-    pipe('L10', 'J2.b', 'J3.a', 1.5, 16),
-    pipe('L11', 'J3.c', 'V3.P', 0.5, 16),
-    pipe('L12', 'J3.b', 'V5.P', 1.5, 16),
-    pipe('L13', 'V3.A', 'A1.A', 1.5, 16),
-    pipe('L14', 'A1.B', 'V3.B', 1.5, 16),
-    pipe('L15', 'V5.A', 'A2.A', 1.5, 12),
-    pipe('L16', 'A2.B', 'J4.a', 1, 12),
-    pipe('L17', 'J4.c', 'S2.M', 0.5, 4),
-    pipe('L18', 'J4.b', 'V4.A', 0.5, 12),
+    pipe('L8', 'J1.b', 'J3.a', 0.5, 16),
+    pipe('L9', 'J3.d', 'V5.P', 0.5, 16),
+    pipe('L10', 'J3.b', 'J2.a', 0.5, 16),
+    pipe('L11', 'J2.c', 'S1.M', 0.5, 4),
+    pipe('L12', 'J2.b', 'V3.P', 1.5, 16),
+    pipe('L13', 'V3.A', 'J4.c', 0.5, 16),
+    pipe('L14', 'J4.a', 'A1.A', 1.5, 16),
+    pipe('L15', 'J4.b', 'S2.M', 0.5, 4),
+    pipe('L16', 'A1.B', 'V3.B', 1.5, 16),
+    pipe('L17', 'V5.A', 'A2.A', 2, 12, [
+      { x: 46, y: 20 },
+      { x: 8, y: 20 },
+    ]),
+    pipe('L18', 'A2.B', 'V4.A', 1, 12),
     pipe('L19', 'V4.B', 'V5.B', 1, 12),
-    pipe('L20', 'V3.T', 'J5.a', 1.5, 20),
-    pipe('L21', 'V5.T', 'J5.c', 1, 20),
+    pipe('L20', 'V3.T', 'J5.d', 1.5, 20),
+    pipe('L21', 'V5.T', 'J5.a', 1, 20),
     pipe('L22', 'J5.b', 'S3.A', 0.5, 20),
     pipe('L23', 'S3.B', 'Z2.A', 0.5, 20),
     pipe('L24', 'Z2.B', 'T4.T', 0.5, 20),

@@ -31,7 +31,7 @@ import {
 export const demoCircuit: CircuitDocument = sample({
   title: 'Cardboard press, packing shed 2',
   components: [
-    part('M1', 'electric-motor', [8.5, 29], {
+    part('M1', 'electric-motor', [6, 29], {
       ratedPower: kilowatts(5.5),
       ratedVoltage: volts(400),
       ratedFrequency: hertz(50),
@@ -49,7 +49,7 @@ export const demoCircuit: CircuitDocument = sample({
     part(
       'P1',
       'compensated-pump',
-      [26.5, 29],
+      [20, 26],
       {
         displacement: cubic(28),
         compensatorPressure: bar(190),
@@ -74,14 +74,14 @@ export const demoCircuit: CircuitDocument = sample({
         locked: ['minVolumeStop'],
       },
     ),
-    part('V1', 'check-valve', [35.5, 23], {}),
-    part('J1', 'junction', [44, 24.5], {
+    part('V1', 'check-valve', [34, 23], {}),
+    part('J1', 'junction', [41, 23], {
       shape: choice('tee'),
     }),
     part(
       'V2',
       'relief-valve',
-      [42.5, 29],
+      [39, 29],
       {
         type: choice('pilot'),
         setPressure: bar(215),
@@ -90,24 +90,25 @@ export const demoCircuit: CircuitDocument = sample({
         setPerTurn: barPerTurn(40),
         setFlow: litres(40),
         override: percent(5.4),
+        reseat: percent(95),
         ratedPressure: bar(315),
       },
       { screws: ['setPressure'], locked: ['setPressure'] },
     ),
-    part('J2', 'junction', [58, 24.5], {
+    part('J2', 'junction', [47, 23], {
       shape: choice('tee'),
     }),
-    part('S1', 'pressure-gauge', [56.3, 17], {
+    part('S1', 'pressure-gauge', [45, 15], {
       range: bar(250),
       lag: milliseconds(50),
     }),
-    part('V3', 'directional-valve-4-3', [66, 18], {
+    part('V3', 'directional-valve-4-3', [61, 18], {
       centre: choice('tandem'),
       ratedFlow: litres(60),
       ratedDrop: bar(5),
       ratedPressure: bar(315),
     }),
-    part('A1', 'cylinder', [56, 4.5], {
+    part('A1', 'cylinder', [53, 4], {
       bore: millimetres(63),
       rod: millimetres(36),
       stroke: millimetres(500),
@@ -117,15 +118,15 @@ export const demoCircuit: CircuitDocument = sample({
       workForce: kilonewtons(52),
       ratedPressure: bar(250),
     }),
-    part('Z1', 'filter', [74.5, 30], {
+    part('Z1', 'filter', [69, 28], {
       ratedFlow: litres(60),
       ratedDrop: bar(0.5),
       bypassPressure: bar(2),
     }),
-    part('T1', 'tank', [28.8, 40]),
-    part('T2', 'tank', [33, 40]),
-    part('T3', 'tank', [42.8, 40]),
-    part('T4', 'tank', [74.8, 40]),
+    part('T1', 'tank', [26, 40]),
+    part('T2', 'tank', [30, 40]),
+    part('T3', 'tank', [40, 40]),
+    part('T4', 'tank', [69, 40]),
   ],
   lines: [
     pipe('L1', 'T1.T', 'P1.suction', 0.6, 32),
@@ -135,7 +136,7 @@ export const demoCircuit: CircuitDocument = sample({
     pipe('L5', 'J1.c', 'V2.P', 0.2, 16),
     pipe('L6', 'V2.T', 'T3.T', 1, 20),
     pipe('L7', 'J1.b', 'J2.a', 0.5, 16),
-    pipe('L8', 'J2.c', 'S1.M', 0.5, 4),
+    pipe('L8', 'J2.d', 'S1.M', 0.5, 4),
     pipe('L9', 'J2.b', 'V3.P', 2.5, 16),
     pipe('L10', 'V3.A', 'A1.A', 1.5, 16),
     pipe('L11', 'A1.B', 'V3.B', 1.5, 16),
@@ -196,7 +197,7 @@ export const demoCircuit: CircuitDocument = sample({
   notes: [
     {
       id: 'note1',
-      at: { x: 2, y: 8 },
+      at: { x: 28, y: 4 },
       text: 'New pump fitted three weeks ago. Old stop setting not written down.',
       author: 'packing shed 2',
       date: '2026-11-28',

@@ -1,0 +1,101 @@
+import {
+  bar,
+  choice,
+  flag,
+  kilograms,
+  kilonewtons,
+  litres,
+  millimetres,
+  milliseconds,
+  motorRequirements,
+  part,
+  pipe,
+  sample,
+  shaftOf,
+} from './sample-builder.ts';
+import { motor, PUMP_SCREWS, pump, RELIEF_SCREW, relief, valve } from './sample-plates.ts';
+
+/** Press with a compensated pump: compensator, relief and stop in their usual order; within limits. Values are our own. */
+export const pressStarter = sample({
+  title: 'Press with compensated pump',
+  components: [
+    part('M1', 'electric-motor', [6, 29], motor(7.5, 15)),
+    part('P1', 'compensated-pump', [20, 26], pump(28, 24, 160), PUMP_SCREWS),
+    part('V1', 'check-valve', [34, 23]),
+    part('J1', 'junction', [41, 23], {
+      shape: choice('tee'),
+    }),
+    part('V2', 'relief-valve', [39, 29], relief('pilot', 190, 35), RELIEF_SCREW),
+    part('J2', 'junction', [47, 23], {
+      shape: choice('tee'),
+    }),
+    part('S1', 'pressure-gauge', [45, 15], {
+      range: bar(250),
+      lag: milliseconds(50),
+    }),
+    part('V3', 'directional-valve-4-3', [61, 18], valve('tandem')),
+    part('A1', 'cylinder', [53, 4], {
+      bore: millimetres(80),
+      rod: millimetres(45),
+      stroke: millimetres(400),
+      mass: kilograms(120),
+      workContact: millimetres(150),
+      workFull: millimetres(250),
+      workForce: kilonewtons(60),
+      ratedPressure: bar(250),
+    }),
+    part('Z1', 'filter', [69, 28], {
+      ratedFlow: litres(60),
+      ratedDrop: bar(0.5),
+      bypassPressure: bar(2),
+    }),
+    part('T1', 'tank', [26, 40]),
+    part('T2', 'tank', [30, 40]),
+    part('T3', 'tank', [40, 40]),
+    part('T4', 'tank', [69, 40]),
+  ],
+  lines: [
+    pipe('L1', 'T1.T', 'P1.suction', 0.6, 32),
+    pipe('L2', 'P1.drain', 'T2.T', 1, 10),
+    pipe('L3', 'P1.outlet', 'V1.A', 0.4, 16),
+    pipe('L4', 'V1.B', 'J1.a', 0.3, 16),
+    pipe('L5', 'J1.c', 'V2.P', 0.2, 16),
+    pipe('L6', 'V2.T', 'T3.T', 1, 20),
+    pipe('L7', 'J1.b', 'J2.a', 0.5, 16),
+    pipe('L8', 'J2.d', 'S1.M', 0.5, 4),
+    pipe('L9', 'J2.b', 'V3.P', 2.5, 16),
+    pipe('L10', 'V3.A', 'A1.A', 1.5, 16),
+    pipe('L11', 'A1.B', 'V3.B', 1.5, 16),
+    pipe('L12', 'V3.T', 'Z1.A', 1.5, 20),
+    pipe('L13', 'Z1.B', 'T4.T', 0.5, 20),
+  ],
+  shafts: [shaftOf('shaft1', 'M1.shaft', 'P1.shaft')],
+  duty: {
+    duration: 7,
+    repeat: true,
+    commands: [
+      flag('start', 0, 'Start', 'M1.contactor', 1),
+      flag('press', 0.6, 'Solenoid a on', 'V3.spool', 1, 0.05),
+      flag('open', 4, 'Solenoid b on', 'V3.spool', -1, 0.05),
+      flag('rest', 6.5, 'Centre', 'V3.spool', 0, 0.05),
+    ],
+  },
+  requirements: [
+    {
+      id: 'force',
+      quantity: 'A1.loadForce',
+      measure: 'peak',
+      min: 60e3,
+      phase: 'Solenoid a on',
+    },
+    {
+      id: 'time',
+      quantity: 'A1.loadForce',
+      measure: 'time to reach',
+      at: 60e3,
+      max: 3.2,
+      phase: 'Solenoid a on',
+    },
+    ...motorRequirements(),
+  ],
+});
