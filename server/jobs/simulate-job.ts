@@ -1,0 +1,11 @@
+import type { SimulateResponse } from '#shared/api/simulate.ts';
+import type { CircuitDocument } from '#shared/circuit/schema.ts';
+
+/** What goes to a simulation thread, and what comes back. */
+export interface SimulateJob {
+  readonly document: CircuitDocument;
+  readonly caseId: string;
+  readonly rtol: number;
+  readonly channels: boolean | readonly string[];
+}
+export type SimulateJobResult = SimulateResponse;

@@ -1,0 +1,3 @@
+import { runCommand } from './run-command.mjs';
+
+await runCommand('shops');
