@@ -82,78 +82,105 @@ export function mergePins(pins: readonly Pin[], x: (time: number) => number, gap
   return groups;
 }
 
-export interface PlacedPin {
-  readonly group: PinGroup;
-  /** Middle of the mark. */
-  readonly x: number;
-  readonly row: number;
-  /** Words that fit beside the mark, or '' where there is no room. */
-  readonly words: string;
-  readonly side: 'left' | 'right';
+/** A finding's number on the tape. */
+export interface Numeral {
+  readonly number: number;
+  readonly caseId: string;
+  /** [s] */
+  readonly time: number;
 }
 
-/** Words of a group: 'A stalls', '12x relief C'. */
+/** What stands at one place on the top edge: a group of pins, numerals of findings, or both. */
+export interface TapeMark {
+  readonly group: PinGroup | null;
+  readonly numerals: readonly Numeral[];
+  readonly x: number;
+}
+
+/** Numerals stand beside the pin of their case and moment, otherwise on their own. */
+export function joinNumerals(groups: readonly PinGroup[], numerals: readonly Numeral[], x: (time: number) => number): TapeMark[] {
+  const marks = groups.map((group) => ({ group, numerals: [] as Numeral[], x: (group.from + group.to) / 2 }));
+  const alone: TapeMark[] = [];
+  for (const numeral of numerals) {
+    const at = x(numeral.time);
+    const near = (mark: { group: PinGroup }) => (mark.group.pins[0] as Pin).caseId === numeral.caseId && reach(mark.group, at) < PIN_GAP;
+    const candidates = marks.filter(near);
+    const best = candidates.find((mark) => (mark.group.pins[0] as Pin).verdict !== null) ?? candidates[0];
+    if (best) best.numerals.push(numeral);
+    else alone.push({ group: null, numerals: [numeral], x: at });
+  }
+  return [...marks, ...alone].sort((a, b) => a.x - b.x);
+}
+
+function reach(group: PinGroup, x: number): number {
+  return Math.max(0, group.from - x, x - group.to);
+}
+
+/** Words of a group: 'A stalls', '12× relief cracks, C'. */
 export function groupWords(group: PinGroup): string {
   const pin = group.pins[0] as Pin;
   const n = group.pins.length;
   return n > 1 ? `${n}× ${pin.words}, ${pin.letter}` : `${pin.letter} ${pin.words}`;
 }
 
+export interface PlacedMark extends TapeMark {
+  readonly row: number;
+  /** Words that fit beside the mark, or '' where there is no room. */
+  readonly words: string;
+  readonly side: 'left' | 'right';
+  /** False where no row had room: it lies over another. */
+  readonly free: boolean;
+}
+
+export interface MarkBand {
+  readonly from: number;
+  readonly to: number;
+  /** Rows in the order in which they are tried. */
+  readonly rows: readonly number[];
+  readonly rowHeight: number;
+}
+
+const MARK = 16;
+const NUMERAL = 20;
+
 /** Puts the marks into rows so that none covers another, then words where they fit, the gravest first.
- *  @param taken boxes that words must not cover (finding numerals, flags); x in pixels, y in rows times `rowHeight` */
-export function placePins(
-  groups: readonly PinGroup[],
-  frame: {
-    readonly from: number;
-    readonly to: number;
-    readonly rows: number;
-    readonly rowHeight: number;
-  },
+ *  @param taken boxes that nothing may cover (flags); x in pixels, y = row × rowHeight
+ *  @param poles boxes that words may not cover
+ *  @param size of the words [px] */
+export function placeMarks(
+  marks: readonly TapeMark[],
+  band: MarkBand,
   taken: readonly Box[],
+  poles: readonly Box[],
   size: number,
-): PlacedPin[] {
-  const MARK = 16;
+): PlacedMark[] {
   const boxes: Box[] = [...taken];
-  const h = frame.rowHeight;
-  const placed = groups.map((group) => {
-    const x = (group.from + group.to) / 2;
-    const w = Math.max(MARK, group.to - group.from + MARK);
-    let row = 0;
-    let box: Box = { x: x - w / 2, y: 0, w, h };
-    for (; row < frame.rows; row += 1) {
-      box = { x: x - w / 2, y: row * h, w, h };
-      if (!boxes.some((other) => overlaps(box, other))) break;
-    }
-    if (row === frame.rows) {
-      row = 0;
-      box = { x: x - w / 2, y: 0, w, h };
-    }
+  const h = band.rowHeight;
+  const last = band.rows[0] ?? 0;
+  const placed = marks.map((mark) => {
+    const span = mark.group ? mark.group.to - mark.group.from + MARK : 0;
+    const left = mark.x - (mark.group ? span / 2 : NUMERAL / 2);
+    const w = span + mark.numerals.length * NUMERAL;
+    const at = (row: number): Box => ({ x: left, y: row * h, w, h: h - 1 });
+    const row = band.rows.find((candidate) => !boxes.some((other) => overlaps(at(candidate), other)));
+    const box = at(row ?? last);
     boxes.push(box);
-    return { group, x, row, words: '', side: 'right' as 'left' | 'right', box };
+    return { mark, row: row ?? last, free: row !== undefined, box, words: '', side: 'right' as 'left' | 'right' };
   });
-  const grave = (entry: { group: PinGroup }) => ((entry.group.pins[0] as Pin).verdict ? 0 : 1);
-  for (const entry of [...placed].sort((a, b) => grave(a) - grave(b))) {
-    const words = groupWords(entry.group);
+  boxes.push(...poles);
+  const rank = (entry: (typeof placed)[number]) => (entry.mark.numerals.length > 0 ? 0 : entry.mark.group?.pins[0]?.verdict ? 1 : 2);
+  const room = { x: band.from, y: Math.min(...band.rows) * h, w: band.to - band.from, h: band.rows.length * h };
+  for (const entry of [...placed].sort((a, b) => rank(a) - rank(b))) {
+    if (!entry.mark.group || !entry.free) continue;
+    const words = groupWords(entry.mark.group);
     const w = textWidth(words, size, 600) + 6;
-    const right = { x: entry.box.x + entry.box.w + 1, y: entry.box.y, w, h };
-    const left = { x: entry.box.x - w - 1, y: entry.box.y, w, h };
-    const room = {
-      x: frame.from,
-      y: 0,
-      w: frame.to - frame.from,
-      h: frame.rows * h,
-    };
+    const right = { x: entry.box.x + entry.box.w + 1, y: entry.box.y, w, h: h - 1 };
+    const left = { x: entry.box.x - w - 1, y: entry.box.y, w, h: h - 1 };
     const box = freePlace([right, left], boxes, room);
     if (!box) continue;
     boxes.push(box);
     entry.words = words;
     entry.side = box === left ? 'left' : 'right';
   }
-  return placed.map(({ group, x, row, words, side }) => ({
-    group,
-    x,
-    row,
-    words,
-    side,
-  }));
+  return placed.map(({ mark, row, words, side, free }) => ({ ...mark, row, words, side, free }));
 }
