@@ -3,88 +3,84 @@
 
 /** y′ = f(t, y) with an exact Jacobian. */
 export interface OdeSystem {
-	/** Number of states that are integrated. */
-	readonly size: number;
-	/** Length of state vectors (≥ size). */
-	readonly length: number;
-	/** Absolute scale of each state: absolute tolerance = rtol × nominal. */
-	readonly nominal: Float64Array;
-	/** True while f depends on time explicitly in the present segment. */
-	readonly ramping: boolean;
-	/** Writes the first `size` entries of dy. */
-	derivative(t: number, y: Float64Array, dy: Float64Array): void;
-	/** Writes ∂f/∂y at (t, y) into the linear solver's slots. */
-	jacobian(t: number, y: Float64Array, values: Float64Array): void;
+  /** Number of states that are integrated. */
+  readonly size: number;
+  /** Length of state vectors (≥ size). */
+  readonly length: number;
+  /** Absolute scale of each state: absolute tolerance = rtol × nominal. */
+  readonly nominal: Float64Array;
+  /** True while f depends on time explicitly in the present segment. */
+  readonly ramping: boolean;
+  /** Writes the first `size` entries of dy. */
+  derivative(t: number, y: Float64Array, dy: Float64Array): void;
+  /** Writes ∂f/∂y at (t, y) into the linear solver's slots. */
+  jacobian(t: number, y: Float64Array, values: Float64Array): void;
 }
 
 /** Solves (shift·I − J)·x = b for a J of fixed pattern. */
 export interface LinearSolver {
-	/** Number of entries of `values`, without the dump slot at the end. */
-	readonly slots: number;
-	/** Nonzeros of the factors. */
-	readonly nonzeros: number;
-	/** How often the fallback with full pivoting was needed. */
-	readonly fallbacks: number;
-	/** False when the matrix is singular or not finite. */
-	factor(values: Float64Array, shift: number): boolean;
-	/** Overwrites the first n entries of b with the solution. */
-	solve(b: Float64Array): void;
-	/** Like `solve`, with a residual check of the factors; false when no usable solution was found. */
-	solveChecked(b: Float64Array): boolean;
+  /** Number of entries of `values`, without the dump slot at the end. */
+  readonly slots: number;
+  /** Nonzeros of the factors. */
+  readonly nonzeros: number;
+  /** How often the fallback with full pivoting was needed. */
+  readonly fallbacks: number;
+  /** False when the matrix is singular or not finite. */
+  factor(values: Float64Array, shift: number): boolean;
+  /** Overwrites the first n entries of b with the solution. */
+  solve(b: Float64Array): void;
+  /** Like `solve`, with a residual check of the factors; false when no usable solution was found. */
+  solveChecked(b: Float64Array): boolean;
 }
 
 export interface SolverOptions {
-	/** Relative tolerance, 1e-12 … 1e-2. */
-	readonly tolerance: number;
-	/** First step after a start or an event [s]. */
-	readonly firstStep: number;
-	/** Steps, rejected ones included, after which the run is given up. */
-	readonly stepCap: number;
+  /** Relative tolerance, 1e-12 … 1e-2. */
+  readonly tolerance: number;
+  /** First step after a start or an event [s]. */
+  readonly firstStep: number;
+  /** Steps, rejected ones included, after which the run is given up. */
+  readonly stepCap: number;
 }
 
 export const defaultSolverOptions: SolverOptions = {
-	tolerance: 1e-4,
-	firstStep: 1e-4,
-	stepCap: 200_000,
+  tolerance: 1e-4,
+  firstStep: 1e-4,
+  stepCap: 200_000,
 };
 
-export type StepOutcome = "accepted" | "end" | "failed";
+export type StepOutcome = 'accepted' | 'end' | 'failed';
 
 export interface StepFailure {
-	readonly reason:
-		| "not-finite-start"
-		| "step-too-small"
-		| "step-cap"
-		| "singular";
-	readonly time: number;
-	/** Index of the state that asked for the smallest step, −1 when unknown. */
-	readonly state: number;
+  readonly reason: 'not-finite-start' | 'step-too-small' | 'step-cap' | 'singular';
+  readonly time: number;
+  /** Index of the state that asked for the smallest step, −1 when unknown. */
+  readonly state: number;
 }
 
 export interface StepCounts {
-	steps: number;
-	rejected: number;
-	evaluations: number;
-	jacobians: number;
-	factorisations: number;
+  steps: number;
+  rejected: number;
+  evaluations: number;
+  jacobians: number;
+  factorisations: number;
 }
 
 /** A one-step method with dense output. After an accepted step the step just taken is readable. */
 export interface Integrator {
-	readonly counts: StepCounts;
-	readonly failure: StepFailure | null;
-	/** Start and end of the step just taken [s]. */
-	readonly from: number;
-	readonly to: number;
-	/** State at `from` and `to`. */
-	readonly before: Float64Array;
-	readonly after: Float64Array;
-	/** Starts a segment at (t, y) that ends exactly at `end`; f is never evaluated outside [t, end]. */
-	begin(t: number, y: Float64Array, end: number): void;
-	/** Takes one accepted step; 'end' when the segment is already complete. */
-	step(): StepOutcome;
-	/** State inside the step just taken, q = 0 … 1. */
-	dense(q: number, out: Float64Array): void;
-	/** Time derivative of the dense output [per s]. */
-	denseSlope(q: number, out: Float64Array): void;
+  readonly counts: StepCounts;
+  readonly failure: StepFailure | null;
+  /** Start and end of the step just taken [s]. */
+  readonly from: number;
+  readonly to: number;
+  /** State at `from` and `to`. */
+  readonly before: Float64Array;
+  readonly after: Float64Array;
+  /** Starts a segment at (t, y) that ends exactly at `end`; f is never evaluated outside [t, end]. */
+  begin(t: number, y: Float64Array, end: number): void;
+  /** Takes one accepted step; 'end' when the segment is already complete. */
+  step(): StepOutcome;
+  /** State inside the step just taken, q = 0 … 1. */
+  dense(q: number, out: Float64Array): void;
+  /** Time derivative of the dense output [per s]. */
+  denseSlope(q: number, out: Float64Array): void;
 }
