@@ -43,6 +43,13 @@ export async function mustRun(file, args, { where = 'the project folder', doing,
   const { code, output } = await runTool(file, args, options);
   if (code === 0) return output;
   const sentence = systemSentence(output, where);
-  const tail = output.trim().split('\n').slice(-12).join('\n');
+  const tail = gist(output);
   throw new Problem(sentence ?? `${doing} failed (exit code ${code}):\n${tail}`);
+}
+
+/** What a tool said, without colours and stacks: the last dozen lines. */
+function gist(output) {
+  const plain = output.replace(/\u001b\[[0-9;]*m/g, '').split('\n');
+  const lines = plain.map((line) => line.trimEnd()).filter((line) => line !== '' && !/^\s+at /.test(line));
+  return lines.slice(-12).join('\n');
 }
