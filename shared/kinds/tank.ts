@@ -1,0 +1,27 @@
+import { defineKind } from './kind.ts';
+
+export const tank = defineKind({
+  id: 'tank',
+  version: 1,
+  title: 'Tank',
+  word: 'tank',
+  letter: 'T',
+  stage: 'return',
+  about: 'The reservoir: 0 bar gauge whatever flows in or out. All tank symbols are the same reservoir.',
+  parameters: [],
+  faults: [],
+  ports: [{ id: 'T', letter: 'T', label: 'Tank', medium: 'oil', role: 'either', whenOpen: 'plugged' }],
+  states: [],
+  inputs: [],
+  screws: [],
+  coefficients: [],
+  prepare: () => ({}),
+  entries: [],
+  flow: () => {},
+  jacobian: () => {},
+  powers: () => {},
+  signals: [],
+  trips: [],
+  readings: [],
+  passes: [],
+});
