@@ -89,7 +89,7 @@ export function routeBetween(from: PlacedPort, to: PlacedPort, obstacles: readon
   let least = Number.POSITIVE_INFINITY;
   const offer = (middle: readonly Point[]) => {
     const path = straighten([p0, ...middle, q0]);
-    if (!path || !leaves(path, pd) || !leaves([...path].reverse(), qd)) return;
+    if (!path || !isOrthogonal(path) || !leaves(path, pd) || !leaves([...path].reverse(), qd)) return;
     const cost = routeCost(path, obstacles, drawn, least);
     if (cost < least - 1e-9) {
       least = cost;
@@ -136,6 +136,13 @@ export function routeBetween(from: PlacedPort, to: PlacedPort, obstacles: readon
 
 function directCost(a: Point, b: Point): number {
   return Math.abs(a.x - b.x) + Math.abs(a.y - b.y) + (a.x === b.x || a.y === b.y ? 0 : 3);
+}
+
+function isOrthogonal(path: readonly Point[]): boolean {
+  return path.every((point, k) => {
+    const next = path[k + 1];
+    return !next || point.x === next.x || point.y === next.y;
+  });
 }
 
 function leaves(path: readonly Point[], direction: Point): boolean {

@@ -1,6 +1,6 @@
 import { oilSpace } from './oil-space.ts';
 import type { ThemeName } from './pressure-ink.ts';
-import type { Picture, Shape, Stroke } from './shape.ts';
+import type { Ink, Picture, Shape, Stroke } from './shape.ts';
 import { combine, groupMatrix, short, uprightMatrix } from './shape-transform.ts';
 import { textureDefinition } from './textures.ts';
 import { inkColour } from './theme.ts';
@@ -23,10 +23,21 @@ function escaped(text: string): string {
   return text.replace(/[&<>"]/g, (sign) => ({ '&': '&amp;', '<': '&lt;', '>': '&gt;', '"': '&quot;' })[sign]!);
 }
 
+/** How markup is coloured and lettered. */
+export interface MarkupStyle {
+  readonly colour: (ink: Ink) => string;
+  /** Turn and mirror of everything around, so that words stay upright. */
+  readonly turn?: number;
+  readonly mirror?: boolean;
+  /** Factor for small words (below two units); 0 leaves them out. */
+  readonly textScale?: number;
+}
+
 interface Context {
-  readonly theme: ThemeName;
+  readonly colour: (ink: Ink) => string;
   readonly turn: number;
   readonly mirror: boolean;
+  readonly textScale: number;
   readonly textures: Map<string, string>;
 }
 
@@ -34,27 +45,32 @@ function paint(shape: Stroke, context: Context): string {
   const parts: string[] = [];
   if (shape.texture) {
     const id = `${shape.texture}-${shape.stroke ?? 'ink'}`;
-    context.textures.set(id, textureDefinition(id, shape.texture, inkColour(shape.stroke ?? 'ink', context.theme)));
+    context.textures.set(id, textureDefinition(id, shape.texture, context.colour(shape.stroke ?? 'ink')));
     parts.push(`fill="url(#${id})"`);
   } else {
-    parts.push(`fill="${shape.fill ? inkColour(shape.fill, context.theme) : 'none'}"`);
+    parts.push(`fill="${shape.fill ? context.colour(shape.fill) : 'none'}"`);
     if (shape.stroke && shape.stroke !== 'none') {
-      parts.push(`stroke="${inkColour(shape.stroke, context.theme)}" stroke-width="${short(shape.width ?? 1)}"`);
+      parts.push(`stroke="${context.colour(shape.stroke)}" stroke-width="${short(shape.width ?? 1)}"`);
       parts.push(`stroke-linejoin="round" stroke-linecap="${shape.cap ?? 'round'}"`);
       if (shape.dash) parts.push(`stroke-dasharray="${shape.dash.map(short).join(' ')}"`);
     }
   }
   if (shape.opacity !== undefined) parts.push(`opacity="${short(shape.opacity)}"`);
+  if (shape.role) parts.push(`data-role="${escaped(shape.role)}"`);
   return parts.join(' ');
 }
 
 function textElement(shape: Extract<Shape, { type: 'text' }>, context: Context): string {
+  const factor = shape.size < 2 ? context.textScale : 1;
+  if (factor === 0) return '';
   const anchor = shape.anchor ?? 'start';
+  const size = shape.size * factor;
+  const y = shape.y + (size - shape.size) * 0.36;
   const upright = uprightMatrix(context.turn, context.mirror, shape.x, shape.y - shape.size * 0.36);
   const turned = shape.turn ? ` transform="rotate(${short(shape.turn)} ${short(shape.x)} ${short(shape.y)})"` : '';
   return (
-    `<text x="${short(shape.x)}" y="${short(shape.y)}" font-family="${fonts[shape.font ?? 'body']}" font-size="${short(shape.size)}"` +
-    ` font-weight="${shape.weight ?? 500}" text-anchor="${anchor}" fill="${inkColour(shape.fill ?? 'ink', context.theme)}"` +
+    `<text x="${short(shape.x)}" y="${short(y)}" font-family="${fonts[shape.font ?? 'body']}" font-size="${short(size)}"` +
+    ` font-weight="${shape.weight ?? 500}" text-anchor="${anchor}" fill="${context.colour(shape.fill ?? 'ink')}"` +
     `${shape.opacity === undefined ? '' : ` opacity="${short(shape.opacity)}"`}${upright ? ` transform="${upright}"` : turned}>` +
     `${escaped(shape.text)}</text>`
   );
@@ -84,6 +100,18 @@ function element(shape: Shape, context: Context): string {
       return `<g transform="matrix(${groupMatrix(shape).map(short).join(' ')})">${body}</g>`;
     }
   }
+}
+
+/** Markup of a drawing list, without the file around it; textures are left to the file. */
+export function shapesMarkup(shapes: readonly Shape[], style: MarkupStyle): string {
+  const context: Context = {
+    colour: style.colour,
+    turn: style.turn ?? 0,
+    mirror: style.mirror ?? false,
+    textScale: style.textScale ?? 1,
+    textures: new Map(),
+  };
+  return shapes.map((shape) => element(shape, context)).join('');
 }
 
 /** One SVG file. Words keep their font names; where the fonts are missing the reader's own sans serif is used. */

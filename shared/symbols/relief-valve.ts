@@ -6,17 +6,15 @@ import type { SymbolDefinition, SymbolState } from './symbol.ts';
  *  pushes the arrow towards the spring until it stands on the ports. Pilot-operated: pilot stage with a filled triangle. */
 
 function still(values: SymbolState['values']): readonly Shape[] {
-  const pilot = values.type === 'pilot';
-  const from = pilot ? 6.3 : 5;
-  const shapes: Shape[] = [box(1, 2, 4, 4), dashed([3, 0.95, 0.1, 0.95, 0.1, 4, 1, 4]), spring(from, 4, 7.5, 4, 0.95, pilot ? 1.5 : 2.5)];
-  if (pilot)
-    shapes.push(box(5, 3.2, 1.3, 1.6, 0.17), {
-      type: 'polyline',
-      points: [5.15, 3.5, 5.15, 4.5, 6.1, 4],
-      closed: true,
-      fill: 'ink',
-    });
-  shapes.push(...arrow(from - (pilot ? 0.1 : -0.2), 5.5, 7.55, 2.15, 0.17, 0.8));
+  const shapes: Shape[] = [
+    box(1, 2, 4, 4),
+    dashed([3, 0.95, 0.1, 0.95, 0.1, 4, 1, 4]),
+    spring(5, 4.3, 7.4, 4.3, 0.95, 2.5),
+    ...arrow(5.25, 5.75, 7.55, 2.15, 0.17, 0.8),
+  ];
+  if (values.type === 'pilot') {
+    shapes.push(box(5, 2, 1.15, 1.15, 0.16), { type: 'polyline', points: [5.9, 2.3, 5.9, 2.85, 5.25, 2.575], closed: true, fill: 'ink' });
+  }
   return shapes;
 }
 
