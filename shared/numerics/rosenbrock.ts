@@ -1,5 +1,6 @@
 import { rodas4p } from './rodas4p-tableau.ts';
 import type { Integrator, LinearSolver, OdeSystem, SolverOptions, StepCounts, StepFailure, StepOutcome } from './solver.ts';
+import { factorAfterRejection, factorAfterSuccess } from './step-control.ts';
 
 /** Taken apart here so that the inner loops read constants of this module. */
 const {
@@ -47,15 +48,6 @@ const {
   H25,
 } = rodas4p;
 
-const SAFETY = 0.9;
-const SHRINK_LIMIT = 0.2;
-const GROWTH_LIMIT = 6;
-
-/** x^(1/4). */
-function fourthRoot(x: number): number {
-  return Math.sqrt(Math.sqrt(x));
-}
-
 /** Rodas4P: one exact Jacobian and one factorisation a step, a new factorisation only after a rejection. Needs the exact
  *  Jacobian (it is not a W-method). Deterministic: + − × ÷ and Math.sqrt only. */
 export class Rosenbrock implements Integrator {
@@ -84,11 +76,12 @@ export class Rosenbrock implements Integrator {
   private readonly u4: Float64Array;
   private readonly u5: Float64Array;
   private readonly u6: Float64Array;
-  private start = 0;
   private end = 0;
   private h = 0;
   private lastStep = 0;
   private lastError = 0;
+  /** State that asked for the shortest step at the latest rejection. */
+  private worst = -1;
   private readonly system: OdeSystem;
   private readonly linear: LinearSolver;
   private readonly options: SolverOptions;
@@ -118,7 +111,6 @@ export class Rosenbrock implements Integrator {
   begin(t: number, y: Float64Array, end: number): void {
     this.after.set(y);
     this.stage.set(y);
-    this.start = t;
     this.from = t;
     this.to = t;
     this.end = end;
@@ -150,53 +142,42 @@ export class Rosenbrock implements Integrator {
     if (system.ramping) this.timeSlope(t, y);
     else this.ft.fill(0);
 
-    const least = 1e-15 * Math.max(Math.abs(t), Math.abs(this.end - this.start));
+    const least = 1e-15 * Math.abs(t) + 1e-30;
     let h = this.h;
     let rejectedBefore = false;
-    let worst = -1;
     for (;;) {
       const left = this.end - t;
       const last = h >= 0.99 * left;
       if (last) h = left;
-      if (!(h > least) && !last) return this.fail('step-too-small', t, worst);
-      if (counts.steps + counts.rejected >= options.stepCap) return this.fail('step-cap', t, worst);
+      if (!(h > least) && !last) return this.fail('step-too-small', t);
+      if (counts.steps + counts.rejected >= options.stepCap) return this.fail('step-cap', t);
       const solved = this.attempt(t, y, h);
-      let error = solved ? this.errorNorm(y) : Number.NaN;
-      if (!Number.isFinite(error)) {
-        worst = this.worstState(y);
-        if (!(h > least)) return this.fail(solved ? 'step-too-small' : 'singular', t, worst);
-        counts.rejected++;
-        rejectedBefore = true;
-        h /= 5;
-        continue;
-      }
+      const error = solved ? this.errorNorm(y) : Number.NaN;
       if (error <= 1) {
-        counts.steps++;
-        error = Math.max(error, 1e-10);
-        let factor = SAFETY / fourthRoot(error);
-        if (this.lastStep > 0) {
-          const predicted = SAFETY * (h / this.lastStep) * fourthRoot(this.lastError / (error * error));
-          if (predicted < factor) factor = predicted;
-        }
-        factor = Math.min(Math.max(factor, SHRINK_LIMIT), GROWTH_LIMIT);
-        if (rejectedBefore && factor > 1) factor = 1;
-        this.lastStep = h;
-        this.lastError = Math.max(error, 0.01);
-        this.h = h * factor;
-        this.from = t;
-        this.to = last ? this.end : t + h;
-        this.finish();
+        this.accept(t, h, last, Math.max(error, 1e-10), rejectedBefore);
         return 'accepted';
       }
-      worst = this.worstState(y);
-      if (!(h > least)) return this.fail('step-too-small', t, worst);
+      this.worst = this.worstState(y);
+      if (!(h > least)) return this.fail(solved ? 'step-too-small' : 'singular', t);
       counts.rejected++;
       rejectedBefore = true;
-      h *= Math.min(Math.max(SAFETY / fourthRoot(error), SHRINK_LIMIT), 1);
+      h *= factorAfterRejection(error);
     }
   }
 
-  private fail(reason: StepFailure['reason'], time: number, state: number): StepOutcome {
+  private accept(t: number, h: number, last: boolean, error: number, rejectedBefore: boolean): void {
+    this.counts.steps++;
+    const ratio = this.lastStep > 0 ? h / this.lastStep : 0;
+    this.h = h * factorAfterSuccess(error, ratio, this.lastError, rejectedBefore);
+    this.lastStep = h;
+    this.lastError = Math.max(error, 0.01);
+    this.from = t;
+    this.to = last ? this.end : t + h;
+    this.finish();
+  }
+
+  private fail(reason: StepFailure['reason'], time: number): StepOutcome {
+    const state = this.worst < 0 && this.counts.steps > 0 ? this.worstState(this.before) : this.worst;
     this.failure = { reason, time, state };
     this.after.set(this.before);
     return 'failed';

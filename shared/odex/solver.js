@@ -1,0 +1,1 @@
+export { Outcome, Solver } from 'odex';
