@@ -101,7 +101,8 @@ describe('parseQuantity', () => {
     expect(parsed).toMatchObject({ ok: false, reason: 'ambiguous' });
     if (parsed.ok || !parsed.readings) throw new Error('two readings expected');
     expect(parsed.readings).toHaveLength(2);
-    const [large, small] = parsed.readings as [{ value: number; label: string }, { value: number; label: string }];
+    const [large, small] = parsed.readings;
+    if (!large || !small) throw new Error('two readings expected'); label: string }, { value: number; label: string }];
     expect(large.value / small.value).toBeCloseTo(1000, 9);
     expect(large.label).toContain('bar');
   });

@@ -1,3 +1,5 @@
+import { casePen } from '#shared/pictures/case-pens.ts';
+
 export interface CaseLetterProps {
   readonly letter: string;
   /** Index of the case ink. */
@@ -28,26 +30,12 @@ export function FindingNumeral({ number, size = 22 }: { readonly number: number;
   );
 }
 
-/** The trace's own dash, for cards and legends. */
-const dashes = ['', '', '8 3', '2 3', '10 3 2 3', '10 3 2 3', '', '8 3', '2 3', '10 3 2 3'];
-const widths = [1.7, 3, 2, 2.2, 2, 1.7, 3, 2, 2.2, 2];
-
-/** Dash and width of a case's trace, by its ink: letter, ink and dash travel together. */
-export function caseStroke(ink: number): { readonly dash: readonly number[]; readonly width: number } {
-  const dash = dashes[ink] ?? '';
-  return { dash: dash === '' ? [] : dash.split(' ').map(Number), width: widths[ink] ?? 2 };
-}
-
+/** The trace's own line, for cards and legends: letter, ink and dash travel together. */
 export function CaseDash({ ink, width = 34 }: { readonly ink: number; readonly width?: number }) {
-  const stroke = caseStroke(ink);
+  const pen = casePen(ink);
   return (
     <svg width={width} height="8" viewBox={`0 0 ${width} 8`} aria-hidden="true">
-      <path
-        d={`M0 4H${width}`}
-        stroke={`var(--case-${ink})`}
-        strokeWidth={stroke.width}
-        strokeDasharray={stroke.dash.join(' ') || undefined}
-      />
+      <path d={`M0 4H${width}`} stroke={`var(--case-${ink})`} strokeWidth={pen.width} strokeDasharray={pen.dash.join(' ') || undefined} />
     </svg>
   );
 }

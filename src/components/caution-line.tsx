@@ -1,11 +1,11 @@
 import { useState } from 'react';
+import { STANDING_CAUTION } from '#shared/findings/cautions.ts';
 import { CautionIcon } from './icons.tsx';
 
-/** Word for word from the product's cautions; nothing may be left out of the whole. */
-export const cautionHead = 'A calculation, not a permission. Stop and lock out.';
-export const cautionRest =
-  'Lower or block the load, let pressure down and prove zero at the cylinder as well as the pump; a gauge at the pump can read zero while a cylinder is loaded. Turn a quarter, tighten the nut, stand clear, start, read. Repeat.';
-export const standingCaution = `${cautionHead} ${cautionRest}`;
+const half = STANDING_CAUTION.indexOf(' Lower or block');
+/** The standing caution word for word, in its two halves. */
+export const cautionHead = STANDING_CAUTION.slice(0, half);
+export const cautionRest = STANDING_CAUTION.slice(half + 1);
 
 export interface CautionLineProps {
   /** 'whole' where there is room; 'half' keeps the first half and opens the rest by "Steps". */

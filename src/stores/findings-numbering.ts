@@ -13,17 +13,6 @@ export interface NumberedFinding {
   readonly ink: number;
 }
 
-/** Letter of a case, from its place among the cases: A is always as found. */
-export function caseLetter(document: Pick<CircuitDocument, 'cases'>, caseId: string): string {
-  return String.fromCharCode(
-    65 +
-      Math.max(
-        0,
-        document.cases.findIndex((entry) => entry.id === caseId),
-      ),
-  );
-}
-
 /** Numbers the findings of the cases on the screen, once: worst first, then in the order of the cases, then by time. */
 export function numberFindings(
   document: Pick<CircuitDocument, 'cases'>,

@@ -1,3 +1,135 @@
+import { type ReactNode, useState } from 'react';
+import { CautionLine } from '#src/components/caution-line.tsx';
+import { ErrorRegion } from '#src/components/error-region.tsx';
+import { CaseRow } from '#src/features/cases/case-row.tsx';
+import { FindingsPanel } from '#src/features/findings/findings-panel.tsx';
+import { useLayout } from '#src/lib/layout.ts';
+import { useDocument } from '#src/stores/document-store.ts';
+import { useNumberedFindings } from '#src/stores/findings-numbering.ts';
+import { BottomBar, type PhoneView } from '../bottom-bar.tsx';
+import { NoticeStrip } from '../notice-strip.tsx';
+import { TopLine } from '../top-line.tsx';
+
+/** The bench: one sheet of paper, its regions divided by ink rules, in the arrangement the width allows. */
 export function BenchRoute() {
-  return <main className="bench" />;
+  const layout = useLayout();
+  const phone = layout === 'phone';
+  return (
+    <div className={`screen screen-${layout}`}>
+      <TopLine screen="bench" />
+      <div className="under-top">
+        <CaseRow form={phone ? 'phone' : 'cards'} sparkline={() => null} />
+        <NoticeStrip />
+      </div>
+      {layout === 'desk' && <WideBench form="list" layout="desk" />}
+      {layout === 'rail' && <WideBench form="rail" layout="rail" />}
+      {layout === 'narrow' && <NarrowBench />}
+      {phone && <PhoneBench />}
+    </div>
+  );
+}
+
+function Region({ name, title, children }: { readonly name: string; readonly title: string; readonly children: ReactNode }) {
+  const document = useDocument((state) => state.document);
+  return (
+    <section className={`region region-${name}`} aria-label={title}>
+      <ErrorRegion name={title} resetOn={[document]}>
+        {children}
+      </ErrorRegion>
+    </section>
+  );
+}
+
+function WideBench({ form, layout }: { readonly form: 'list' | 'rail'; readonly layout: 'desk' | 'rail' }) {
+  return (
+    <main className={`bench bench-${layout}`}>
+      <Region name="drawing" title="The drawing">
+        {null}
+      </Region>
+      <Region name="findings" title="Findings">
+        <FindingsPanel form={form} />
+      </Region>
+      <Region name="tape" title="The tape">
+        {null}
+      </Region>
+      <Region name="load" title="The load picture">
+        {null}
+      </Region>
+      <div className="region-caution">
+        <CautionLine form={form === 'rail' ? 'half' : 'whole'} />
+      </div>
+    </main>
+  );
+}
+
+function NarrowBench() {
+  const [side, setSide] = useState<'findings' | 'load'>('findings');
+  const count = useNumberedFindings().length;
+  return (
+    <main className="bench bench-narrow">
+      <Region name="drawing" title="The drawing">
+        {null}
+      </Region>
+      <div className="region-rail">
+        <div className="rail-tabs" role="tablist" aria-label="Beside the drawing">
+          <button type="button" role="tab" id="tab-findings" aria-selected={side === 'findings'} onClick={() => setSide('findings')}>
+            Findings {count}
+          </button>
+          <button type="button" role="tab" id="tab-load" aria-selected={side === 'load'} onClick={() => setSide('load')}>
+            Load
+          </button>
+        </div>
+        {side === 'findings' ? (
+          <Region name="findings" title="Findings">
+            <FindingsPanel form="rail" />
+          </Region>
+        ) : (
+          <Region name="load" title="The load picture">
+            {null}
+          </Region>
+        )}
+      </div>
+      <Region name="tape" title="The tape">
+        {null}
+      </Region>
+      <div className="region-caution">
+        <CautionLine form="half" />
+      </div>
+    </main>
+  );
+}
+
+function PhoneBench() {
+  const [view, setView] = useState<PhoneView>('drawing');
+  const count = useNumberedFindings().length;
+  return (
+    <main className="bench bench-phone">
+      <div className={`phone-view phone-view-${view}`}>
+        {view === 'drawing' && (
+          <Region name="drawing" title="The drawing">
+            {null}
+          </Region>
+        )}
+        {(view === 'tape' || view === 'drawing') && (
+          <Region name="tape" title="The tape">
+            {null}
+          </Region>
+        )}
+        {view === 'load' && (
+          <Region name="load" title="The load picture">
+            {null}
+          </Region>
+        )}
+        {view === 'findings' && (
+          <Region name="findings" title="Findings">
+            <FindingsPanel form="list" />
+          </Region>
+        )}
+      </div>
+      <div className="region-caution">
+        <CautionLine form="half" />
+      </div>
+      <BottomBar view={view} findings={count} onChange={setView} />
+    </main>
+  );
 }

@@ -1,0 +1,32 @@
+import { Icon } from '#src/components/icons.tsx';
+import { useKeeping } from '#src/stores/keeping-store.ts';
+
+/** One strip above the sheet for what a person must know about the circuit in hand; never a blocking dialog. */
+export function NoticeStrip() {
+  const notice = useKeeping((state) => state.notice);
+  const setNotice = useKeeping((state) => state.setNotice);
+  const keeping = useKeeping((state) => state.keeping);
+  const takeOver = useKeeping((state) => state.takeOver);
+  return (
+    <>
+      {keeping === 'other-tab' && takeOver && (
+        <div className="notice-strip no-print" role="status">
+          <p>
+            <strong>Open in another tab.</strong> That tab keeps the circuit of this device; what you change here is not kept.
+          </p>
+          <button type="button" className="button" onClick={takeOver}>
+            Keep this one instead
+          </button>
+        </div>
+      )}
+      {notice && (
+        <div className="notice-strip no-print" role="status">
+          <p>{notice}</p>
+          <button type="button" className="button-icon" aria-label="Put the notice away" onClick={() => setNotice(null)}>
+            <Icon name="close" size={16} />
+          </button>
+        </div>
+      )}
+    </>
+  );
+}

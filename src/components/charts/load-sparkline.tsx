@@ -1,0 +1,46 @@
+import { useMemo } from 'react';
+import type { Yardsticks } from '#shared/findings/finding.ts';
+import { tapeStall } from '#shared/pictures/tape-references.ts';
+import type { RunResult } from '#shared/simulation/result.ts';
+import { Sparkline } from './sparkline.tsx';
+
+export interface LoadSparklineProps {
+  readonly run: RunResult;
+  readonly yardsticks: readonly Yardsticks[];
+  readonly ink: number;
+  readonly dash?: readonly number[];
+  readonly width?: number;
+  readonly height?: number;
+  readonly stale?: boolean;
+}
+
+/** Motor load over the duty, × rated, with the rated line and the stall; pressure at the first pump where there is no motor.
+ *  Draws nothing when the run has neither. */
+export function LoadSparkline({ run, yardsticks, ink, dash, width, height, stale }: LoadSparklineProps) {
+  const found = useMemo(() => {
+    const motor = yardsticks[0]?.motor;
+    const load = run.channels.find((channel) =>
+      motor ? channel.address === `${motor}.torqueRatio` : channel.address.endsWith('.torqueRatio'),
+    );
+    const channel = load ?? run.channels.find((entry) => entry.address.endsWith('.outlet.pressure'));
+    const stall = tapeStall(run, yardsticks);
+    const cut = stall !== null && stall.traceEnd < run.time;
+    return { channel, isLoad: load !== undefined, end: cut && stall ? stall.time : run.time, cut };
+  }, [run, yardsticks]);
+  if (!found.channel) return null;
+  return (
+    <Sparkline
+      times={run.times}
+      values={found.channel.values}
+      end={found.end}
+      duration={run.duration}
+      ink={ink}
+      dash={dash}
+      width={width}
+      height={height}
+      reference={found.isLoad ? 1 : undefined}
+      stalled={found.cut}
+      stale={stale}
+    />
+  );
+}

@@ -1,0 +1,35 @@
+import { create } from 'zustand';
+
+/** Where the circuit in hand is kept, for the word beside the title. */
+export type Keeping = 'loading' | 'kept' | 'saving' | 'other-tab' | 'not-kept';
+
+export interface KeepingState {
+  readonly keeping: Keeping;
+  /** Why it is not kept, in words. */
+  readonly reason: string | null;
+  /** One sentence above the sheet that can be put away: an unreadable draft, a refused file. */
+  readonly notice: string | null;
+  /** Takes the keeping over from another tab; null while this tab has it. */
+  readonly takeOver: (() => void) | null;
+  setKeeping: (keeping: Keeping, reason?: string) => void;
+  setNotice: (notice: string | null) => void;
+  setTakeOver: (takeOver: (() => void) | null) => void;
+}
+
+export const useKeeping = create<KeepingState>()((set) => ({
+  keeping: 'loading',
+  reason: null,
+  notice: null,
+  takeOver: null,
+  setKeeping: (keeping, reason) => set({ keeping, reason: reason ?? null }),
+  setNotice: (notice) => set({ notice }),
+  setTakeOver: (takeOver) => set({ takeOver }),
+}));
+
+export const keepingWords: Record<Keeping, string> = {
+  loading: 'opening\u2026',
+  kept: 'kept on this device',
+  saving: 'kept on this device',
+  'other-tab': 'open in another tab, not kept here',
+  'not-kept': 'not kept: this device offers no storage',
+};
