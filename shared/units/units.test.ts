@@ -102,7 +102,7 @@ describe('parseQuantity', () => {
     if (parsed.ok || !parsed.readings) throw new Error('two readings expected');
     expect(parsed.readings).toHaveLength(2);
     const [large, small] = parsed.readings;
-    if (!large || !small) throw new Error('two readings expected'); label: string }, { value: number; label: string }];
+    if (!large || !small) throw new Error('two readings expected');
     expect(large.value / small.value).toBeCloseTo(1000, 9);
     expect(large.label).toContain('bar');
   });
