@@ -196,7 +196,7 @@ export function evaluateMotor(block: Block, i: number, w: Workspace): MotorPoint
   const magnetising = c[b + C.magnetising]!;
   const square = magnetising * magnetising + scale * torque * sc;
   const root = Math.sqrt(square);
-  const rootSlope = (held * (scaleSlope * torque * sc + scale * (torqueSlope * sc + torque))) / (2 * root);
+  const rootSlope = (held * (scaleSlope * sc + scale) * torque + scale * torqueSlope * sc) / (2 * root);
 
   // Faults on the winding: legs of a motor that has lost a phase, and the star connection.
   const slip = s / faster;
