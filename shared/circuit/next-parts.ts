@@ -1,7 +1,7 @@
 import type { ComponentKind, PortSpec } from '../kinds/kind.ts';
 import { kinds } from '../kinds/registry.ts';
 import { isOpen } from './edit/joins.ts';
-import { findComponent, findKind, findPort, portInWords, samePort } from './kind-lookup.ts';
+import { findComponent, findKind, findPort, kindOfComponent, portInWords, samePort } from './kind-lookup.ts';
 import type { CircuitDocument, PortRef } from './schema.ts';
 
 /** What may follow an open port, by the order in which oil flows. Rules of the trade (common practice, no source): a pump line
@@ -51,11 +51,12 @@ const order: Record<Place, readonly string[]> = {
 export function nextParts(document: CircuitDocument, ref: PortRef): NextParts {
   const port = findPort(document, ref);
   if (!port) return { question: 'What follows?', parts: [] };
+  const fromKind = kindOfComponent(document, ref.component);
   const place = placeOf(document, ref, port);
   const likely = likelyKind(document, ref, place);
   const offered = order[place].flatMap((id) => {
     const kind = findKind(id);
-    const entry = kind && entryPort(port, kind);
+    const entry = kind && entryPort(port, kind, fromKind);
     return kind && entry ? [{ kind: id, word: kind.word, port: entry.id, likely: false }] : [];
   });
   const marked = offered.some((part) => part.kind === likely) ? likely : offered[0]?.kind;
@@ -66,25 +67,33 @@ export function nextParts(document: CircuitDocument, ref: PortRef): NextParts {
 export function allNextParts(document: CircuitDocument, ref: PortRef): NextPart[] {
   const port = findPort(document, ref);
   if (!port) return [];
-  return Object.values(kinds as Readonly<Record<string, ComponentKind>>).flatMap((kind) => {
-    const entry = entryPort(port, kind);
+  const fromKind = kindOfComponent(document, ref.component);
+  return kinds.flatMap((kind) => {
+    const entry = entryPort(port, kind, fromKind);
     return entry ? [{ kind: kind.id, word: kind.word, port: entry.id, likely: false }] : [];
   });
 }
 
-/** Port of a new part that an open port would be joined to: the counterpart in flow direction; between a valve's and an
- *  actuator's work ports the one with the same letter. */
-export function entryPort(from: PortSpec, kind: ComponentKind): PortSpec | undefined {
+/** Port of a new part that an open port would be joined to: the counterpart in flow direction; between the work ports of a
+ *  valve and an actuator the one with the same letter. */
+export function entryPort(from: PortSpec, kind: ComponentKind, fromKind: ComponentKind | undefined): PortSpec | undefined {
   const ports = kind.ports.filter((port) => port.medium === from.medium);
-  const same =
-    from.letter !== '' && (from.letter === 'A' || from.letter === 'B') ? ports.find((port) => port.letter === from.letter) : undefined;
-  if (from.role === 'either' && same?.role === 'either') return same;
+  if (fromKind && isWorkPort(fromKind, from)) {
+    const same = ports.find((port) => port.letter === from.letter && isWorkPort(kind, port));
+    if (same) return same;
+  }
   const wanted = from.role === 'inlet' ? ['outlet', 'either', 'inlet'] : ['inlet', 'either', 'outlet'];
   for (const role of wanted) {
     const found = ports.find((port) => port.role === role);
     if (found) return found;
   }
   return ports[0];
+}
+
+/** Ports A and B of an actuator or of a valve that also has P and T. */
+function isWorkPort(kind: ComponentKind, port: PortSpec): boolean {
+  if (port.letter !== 'A' && port.letter !== 'B') return false;
+  return kind.stage === 'act' || ['P', 'T'].every((letter) => kind.ports.some((entry) => entry.letter === letter));
 }
 
 function placeOf(document: CircuitDocument, ref: PortRef, port: PortSpec): Place {

@@ -11,7 +11,8 @@ export interface Point {
 }
 
 const LIMIT = 9_900;
-const half = (value: number) => Math.max(-LIMIT, Math.min(LIMIT, Math.round(value * 2) / 2));
+// Adding 0 turns −0 into 0, which is what a file would give back.
+const half = (value: number) => Math.max(-LIMIT, Math.min(LIMIT, Math.round(value * 2) / 2)) + 0;
 
 /** Positions lie on half modules, inside the sheet's limits. */
 export function snapPoint(point: Point): { x: number; y: number } {

@@ -54,10 +54,13 @@ export function openArm(document: CircuitDocument, ref: PortRef): PortRef {
  *  Nothing changes, and `problem` says why, when they cannot be joined. */
 export function connect(
   document: CircuitDocument,
-  from: PortRef,
-  to: PortRef,
+  fromPort: PortRef,
+  toPort: PortRef,
   branchAt: Point = { x: 0, y: 0 },
 ): { document: CircuitDocument; lineId: string | null; problem: string | null } {
+  // Callers may hand over richer objects; the document holds the reference alone.
+  const from = { component: fromPort.component, port: fromPort.port };
+  const to = { component: toPort.component, port: toPort.port };
   const problem = joinProblem(document, from, to);
   if (problem) return { document, lineId: null, problem };
   if (findPort(document, from)?.medium === 'shaft') return { document: joinShaft(document, from, to), lineId: null, problem: null };
