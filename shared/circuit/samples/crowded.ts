@@ -38,6 +38,7 @@ export const crowdedCircuit: CircuitDocument = sample({
       ratedSpeed: rpm(1450),
       ratedCurrent: amps(15),
       lockedRotorCurrent: ratio(6),
+      contactorAtStart: choice('open'),
       designLetter: choice('N minima'),
       serviceFactor: ratio(1),
       relayFitted: choice('yes'),

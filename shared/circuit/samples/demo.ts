@@ -39,6 +39,7 @@ export const demoCircuit: CircuitDocument = sample({
       ratedSpeed: rpm(1450),
       ratedCurrent: amps(11),
       lockedRotorCurrent: ratio(6),
+      contactorAtStart: choice('open'),
       designLetter: choice('N minima'),
       serviceFactor: ratio(1),
       relayFitted: choice('yes'),
@@ -113,9 +114,10 @@ export const demoCircuit: CircuitDocument = sample({
       rod: millimetres(36),
       stroke: millimetres(500),
       mass: kilograms(80),
-      workContact: millimetres(120),
-      workFull: millimetres(345),
+      workContact: millimetres(60),
+      workFull: millimetres(350),
       workForce: kilonewtons(52),
+      workShape: choice('1'),
       ratedPressure: bar(250),
     }),
     part('Z1', 'filter', [69, 28], {
@@ -145,13 +147,13 @@ export const demoCircuit: CircuitDocument = sample({
   ],
   shafts: [shaftOf('shaft1', 'M1.shaft', 'P1.shaft')],
   duty: {
-    duration: 8,
+    duration: 8.5,
     repeat: true,
     commands: [
       flag('start', 0, 'Start', 'M1.contactor', 1),
       flag('press', 0.6, 'Solenoid a on', 'V3.spool', 1, 0.05),
       flag('open', 5.4, 'Solenoid b on', 'V3.spool', -1, 0.05),
-      flag('rest', 7.6, 'Centre', 'V3.spool', 0, 0.05),
+      flag('rest', 8, 'Centre', 'V3.spool', 0, 0.05),
     ],
   },
   requirements: [

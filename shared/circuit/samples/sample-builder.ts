@@ -100,7 +100,8 @@ export function motorRequirements(): Requirement[] {
   ];
 }
 
-/** Everything a sample does not say for itself: ordinary oil at 45 °C, 400 V 50 Hz, near sea level, one case A. */
+/** Everything a sample does not say for itself: ordinary oil at 45 °C, a tank whose area counts a small air cooler, 400 V
+ *  50 Hz, near sea level, one case A. */
 export function sample(
   content: Partial<CircuitDocument> & Pick<CircuitDocument, 'title' | 'components' | 'lines' | 'duty'>,
 ): CircuitDocument {
@@ -114,7 +115,7 @@ export function sample(
       bulkModulus: 1.7e9,
       density: 870,
     },
-    reservoir: { volume: 0.12, temperature: 318.15, coolingArea: 1.6 },
+    reservoir: { volume: 0.16, temperature: 318.15, coolingArea: 4 },
     supply: { voltage: 400, frequency: 50, impedance: 0 },
     site: { altitude: 100 },
     shafts: [],

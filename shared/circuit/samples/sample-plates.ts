@@ -27,6 +27,7 @@ export function motor(power: number, current: number): Record<string, ParameterV
     ratedSpeed: rpm(1450),
     ratedCurrent: amps(current),
     lockedRotorCurrent: ratio(6),
+    contactorAtStart: choice('open'),
     designLetter: choice('N minima'),
     serviceFactor: ratio(1),
     relayFitted: choice('yes'),

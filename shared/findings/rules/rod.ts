@@ -1,0 +1,131 @@
+import type { Component } from '../../circuit/schema.ts';
+import type { FindingContext } from '../context.ts';
+import { reliefsOf } from '../context.ts';
+import type { Finding } from '../finding.ts';
+import { AT_REST } from '../house-rules.ts';
+import { figure, force, pressure, say } from '../phrase.ts';
+import { compensatorUp, cracking } from '../remedies.ts';
+import { mean, stretches, type Window } from '../series.ts';
+import { commandOf, feedingPumps } from '../supply-path.ts';
+
+/** A rod that stops short: commanded, at rest, neither at an end nor at the force it needs. */
+export function rodRules(context: FindingContext): Finding[] {
+  return context.ofKind('cylinder').flatMap((cylinder) => stopsShort(context, cylinder));
+}
+
+const REST_TIME = 0.3;
+/** A chamber that is still filling is not stuck: gauge pressure on the commanded side [Pa]. */
+const FILLED = 2e4;
+/** At an end: within this of it [m]. */
+const END = 1e-3;
+/** Force counts as reached from this share on. */
+const ENOUGH = 0.995;
+
+/** Force that the job needs at this rod [N]; null when nobody has said. */
+export function neededForce(context: FindingContext, cylinder: string): number | null {
+  const asked = context.seen.requirements
+    .filter((requirement) => requirement.quantity === `${cylinder}.loadForce` || requirement.quantity === `${cylinder}.force`)
+    .map((requirement) => (requirement.measure === 'time to reach' ? requirement.at : requirement.min))
+    .filter((value): value is number => value !== undefined);
+  if (asked.length > 0) return Math.max(...asked);
+  const plate = context.plate(cylinder);
+  const entered = plate.given('requiredForce');
+  if (entered !== null && entered > 0) return entered;
+  const work = plate.number('workForce');
+  return work > 0 ? work : null;
+}
+
+function stopsShort(context: FindingContext, cylinder: Component): Finding[] {
+  const id = cylinder.id;
+  const plate = context.plate(id);
+  const position = context.column(`${id}.position`);
+  const velocity = context.column(`${id}.velocity`);
+  const load = context.column(`${id}.loadForce`);
+  const cap = context.column(`${id}.A.pressure`);
+  const rod = context.column(`${id}.B.pressure`);
+  const command = commandOf(context, id);
+  if (!position || !velocity || !cap || !rod || !command) return [];
+  const stroke = plate.number('stroke');
+  const needed = neededForce(context, id);
+  const turning = (i: number) =>
+    context.drives.length === 0 || context.drives.some((drive) => isTurning(context, drive.component.id, i, drive.facts.pullOutSpeed));
+  const stuck = stretches(
+    context.times,
+    (i) => {
+      const x = position[i]!;
+      const way = command(i);
+      if (way === 0 || !turning(i) || Math.abs(velocity[i]!) >= AT_REST) return -1;
+      if ((way > 0 ? cap[i]! : rod[i]!) < FILLED) return -1;
+      if ((way > 0 && x > stroke - END) || (way < 0 && x < END)) return -1;
+      if (way > 0 && needed !== null && load && load[i]! >= ENOUGH * needed) return -1;
+      return 1;
+    },
+    REST_TIME,
+  );
+  const window = stuck[0];
+  if (!window) return [];
+  return [finding(context, id, window, needed)];
+}
+
+function isTurning(context: FindingContext, motor: string, i: number, pullOutSpeed: number): boolean {
+  const speed = context.column(`${motor}.speed`);
+  return speed !== null && speed[i]! >= pullOutSpeed;
+}
+
+function finding(context: FindingContext, id: string, window: Window, needed: number | null): Finding {
+  const load = context.column(`${id}.loadForce`);
+  const available = load ? mean(context.times, load, window) : 0;
+  const at = (window.from + window.to) / 2;
+  const cap = context.at(`${id}.A.pressure`, at);
+  const place = context.at(`${id}.position`, at);
+  const name = context.name(id);
+  const pump = feedingPumps(context, id)[0];
+  const relief =
+    pump && reliefsOf(context, pump).find((entry) => context.at(`${entry.id}.P.pressure`, at) >= 0.98 * cracking(context, entry.id));
+  const deadHead = pump ? context.plate(pump).number('compensatorPressure') : 0;
+  const limit = relief
+    ? say(
+        ` ${context.name(relief.id)} opens at `,
+        pressure(cracking(context, relief.id), `${relief.id}.cracksAt`),
+        ' and lets no more pressure build.',
+      )
+    : pump && context.at(`${pump}.outlet.pressure`, at) > 0.95 * deadHead
+      ? say(' The compensator stops at ', pressure(deadHead), '.')
+      : say('');
+  return {
+    id: `rod-stops-short:${id}`,
+    rule: 'rod-stops-short',
+    severity: 0,
+    verdict: 'rod-stops-short',
+    caseId: context.caseId,
+    component: id,
+    time: window.from,
+    headline:
+      needed === null
+        ? say(`${name} stops short at `, figure(place, 'length'))
+        : say(`${name} stops short: `, force(available, `${id}.loadForce`), ' of ', force(needed)),
+    cause: say(
+      `${name} is commanded and stands at `,
+      figure(place, 'length', { address: `${id}.position` }),
+      ' with ',
+      pressure(cap, `${id}.A.pressure`),
+      ' on the cap side. It pushes ',
+      force(available, `${id}.loadForce`),
+      needed === null ? '.' : say('; ', force(needed), ' is needed.'),
+      limit,
+    ),
+    remedy: relief
+      ? {
+          words: say(
+            'This force cannot be had at this relief setting. Find out why the relief stands where it does; if the motor was to be spared, the max. volume stop does that without costing force. A higher relief is not a cure.',
+          ),
+        }
+      : pump
+        ? compensatorUp(
+            context,
+            pump,
+            say('Turn the compensator up as little as the force needs, under the relief’s cracking pressure and every rating.'),
+          )
+        : { words: say('Find where the pressure is lost between pump and cylinder.') },
+  };
+}
