@@ -1,10 +1,8 @@
 import type { QuantityId } from '../units/quantities.ts';
 import type { ChoiceParameter, FaultSpec, InputSpec, NumberParameter, ParameterGroup, Plate } from './kind.ts';
+import { ENTERED } from './sources.ts';
 
 /** Short forms in which kinds write their declarations, so that a nameplate row stays readable. */
-
-export const PRACTICE = 'common practice, no source';
-export const TYPICAL = 'reference sheet, section 15 (typical ranges)';
 
 interface NumberExtras {
   readonly typical?: readonly [number, number];
@@ -58,7 +56,7 @@ export function raw(
     null,
     range,
     `${help} Replaces the plate value; used as given, without correction for viscosity.`,
-    'entered',
+    ENTERED,
     equation ? { equation } : {},
   );
 }
@@ -98,13 +96,10 @@ export const CUBIC_CENTIMETRE_PER_TURN = 1e-6 / (2 * Math.PI);
 export const LITRE_PER_MINUTE = 1e-3 / 60;
 export const TURN_PER_MINUTE = (2 * Math.PI) / 60;
 
-/** Index of each name in its list, typed: `indices(['a', 'b']).b` is 1. */
+/** Index of each name in its list, typed: `indices(['a', 'b']).b` is 1. Kernels read these in every pass: built in one go, because
+ *  an object to which many names are added one by one becomes slow to read. */
 export function indices<const N extends readonly string[]>(names: N): { readonly [K in N[number]]: number } {
-  const table: Record<string, number> = {};
-  names.forEach((name, index) => {
-    table[name] = index;
-  });
-  return table as { readonly [K in N[number]]: number };
+  return Object.freeze(Object.fromEntries(names.map((name, index) => [name, index]))) as { readonly [K in N[number]]: number };
 }
 
 /** Severity of a fault on the nameplate, 0 where it is not entered. */

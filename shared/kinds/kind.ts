@@ -180,6 +180,9 @@ export interface Workspace {
    *  to `volume` also adds −balance/volume · dV/dx in the entry of that node and state: `balance` and `volume` are complete
    *  at this y when `jacobian` is called. */
   readonly jac: Float64Array;
+  /** Number of the flow pass: changes whenever y or u have changed. A kind may keep the working of one instance for the rest of
+   *  a pass (see memo.ts); without a number it keeps nothing. */
+  readonly pass?: number;
 }
 
 /** Row and column of one Jacobian entry: a port id (its node's balance or shared value) or 'state:<id>'. */

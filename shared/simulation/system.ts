@@ -16,8 +16,8 @@ export class CircuitSystem implements OdeSystem {
   /** Present value of every input. */
   readonly u: Float64Array;
   /** Workspace of readings: `balance` has a slot per port. */
-  readonly reading: Workspace;
-  private readonly w: Mutable<Workspace>;
+  readonly reading: Workspace & { pass: number };
+  private readonly w: Mutable<Workspace> & { pass: number };
   private readonly oil: OilModel;
   private readonly kinds: readonly ComponentKind[];
   private readonly blocks: readonly Block[];
@@ -44,7 +44,7 @@ export class CircuitSystem implements OdeSystem {
     this.kinds = working.map(({ kind }) => kind);
     this.blocks = working.map(({ block }) => block);
     this.readingBlocks = working.map(({ reading }) => reading);
-    this.w = { y: vector(), dy: vector(), balance: vector(), volume: vector(), u: this.u, jac: new Float64Array(0) };
+    this.w = { y: vector(), dy: vector(), balance: vector(), volume: vector(), u: this.u, jac: new Float64Array(0), pass: 0 };
     this.reading = {
       y: vector(),
       dy: vector(),
@@ -52,6 +52,7 @@ export class CircuitSystem implements OdeSystem {
       volume: vector(),
       u: this.u,
       jac: new Float64Array(0),
+      pass: 0,
     };
     this.capacity = new Float64Array(circuit.nodes);
     this.rowScale = new Float64Array(this.size).fill(1);
@@ -102,6 +103,7 @@ export class CircuitSystem implements OdeSystem {
     if (this.ramping) this.setTime(t);
     w.y = y;
     w.dy = dy;
+    w.pass++;
     const { balance, volume } = w;
     balance.fill(0);
     volume.set(circuit.volume);
@@ -143,6 +145,7 @@ export class CircuitSystem implements OdeSystem {
     const { circuit, reading, kinds, readingBlocks } = this;
     if (this.ramping) this.setTime(t);
     reading.y.set(y);
+    reading.pass++;
     reading.balance.fill(0);
     reading.volume.set(circuit.volume);
     for (let k = 0; k < kinds.length; k++) kinds[k]!.flow(readingBlocks[k]!, reading);

@@ -9,6 +9,7 @@ import {
 } from '../../numerics/smooth.ts';
 import { indices } from '../build.ts';
 import type { Block, Workspace } from '../kind.ts';
+import { Memo } from '../memo.ts';
 import {
   compensatorStroke,
   dryFriction,
@@ -110,8 +111,11 @@ export const pumpPoint: PumpPoint = {
   rateByPressure: 0,
 };
 
+const memo = new Memo();
+
 /** Fills `pumpPoint` for instance i. */
 export function evaluatePump(block: Block, i: number, w: Workspace): PumpPoint {
+  if (memo.holds(block, i, w)) return pumpPoint;
   const c = block.c;
   const b = i * block.coefficientCount;
   const n = i * block.inputCount;

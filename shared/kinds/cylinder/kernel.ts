@@ -1,6 +1,7 @@
 import { sine } from '../../fluid/elementary.ts';
 import { indices } from '../build.ts';
 import type { Block, Plate, RunConstants, Workspace } from '../kind.ts';
+import { Memo } from '../memo.ts';
 import { capArea, friction, frictionSlope, GRAVITY, hydraulicForce, rodSideArea, workShare, workShareSlope } from './laws.ts';
 
 export const cylinderCoefficients = [
@@ -136,8 +137,11 @@ function evaluateStop(x: number, v: number, stroke: number, stiffness: number, d
   point.stopByVelocity = (out ? -1 : 1) * stiffness * deep * damping;
 }
 
+const memo = new Memo();
+
 /** Working of cylinder i at this instant. The object is reused by the next call. */
 export function evaluateCylinder(block: Block, i: number, w: Workspace): CylinderPoint {
+  if (memo.holds(block, i, w)) return point;
   const { c } = block;
   const b = i * block.coefficientCount;
   const n = i * block.inputCount;

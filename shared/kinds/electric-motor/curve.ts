@@ -1,6 +1,7 @@
 import { smoothSign, smoothSignSlope, smoothStep, smoothStepSlope } from '../../numerics/smooth.ts';
 import { indices } from '../build.ts';
 import type { Block, Plate, RunConstants, Workspace } from '../kind.ts';
+import { Memo } from '../memo.ts';
 import { classTimeConstant, designMinima, pullOutSlip, relayFactor, synchronousSpeed } from './laws.ts';
 
 /** Torque and current of the motor at one shaft speed, with their derivatives.
@@ -135,6 +136,8 @@ export const motorPoint: MotorPoint = {
 
 const torqueAt = { value: 0, slope: 0 };
 
+const memo = new Memo();
+
 /** T(σ) and dT/dσ at rated voltage and frequency into `torqueAt`. */
 function torqueCurve(c: Float64Array, b: number, s: number): void {
   const tb = c[b + C.pullOutTorque]!;
@@ -161,6 +164,7 @@ function torqueCurve(c: Float64Array, b: number, s: number): void {
 
 /** Fills `motorPoint` for instance i. */
 export function evaluateMotor(block: Block, i: number, w: Workspace): MotorPoint {
+  if (memo.holds(block, i, w)) return motorPoint;
   const c = block.c;
   const b = i * block.coefficientCount;
   const n = i * block.inputCount;

@@ -1,6 +1,7 @@
 import { orifice, orificeSlope, smoothMax, smoothMaxSlope, smoothMin, smoothMinSlope } from '../../numerics/smooth.ts';
 import { indices } from '../build.ts';
 import type { Block, Workspace } from '../kind.ts';
+import { Memo } from '../memo.ts';
 import { LAMINAR, LIFT_ROUNDING, REST_ROUNDING, reliefCoefficient, wantedLift } from './laws.ts';
 
 /** cracking = crackShare·setting + crackFixed, and so on: a raw value fills the fixed part, the plate the share. */
@@ -34,8 +35,11 @@ const point: ReliefPoint = {
   rateByLift: 0,
 };
 
+const memo = new Memo();
+
 /** Working of relief valve i at this instant, with the derivatives. The object is reused by the next call. */
 export function evaluateRelief(block: Block, i: number, w: Workspace): ReliefPoint {
+  if (memo.holds(block, i, w)) return point;
   const c = block.c;
   const b = i * block.coefficientCount;
   const n = i * block.inputCount;
