@@ -1,7 +1,8 @@
 import { orifice, orificeSlope, smoothStep, smoothStepSlope } from '../numerics/smooth.ts';
 import { coefficient } from './access.ts';
-import { BAR, indices, LITRE_PER_MINUTE, number, PRACTICE, raw, TYPICAL } from './build.ts';
+import { BAR, indices, LITRE_PER_MINUTE, number, raw } from './build.ts';
 import { type Block, defineKind, type Workspace } from './kind.ts';
+import * as S from './sources.ts';
 import { dropAcross, dropReading, flowReading, passFlow, passSlope, throughEntries } from './two-port.ts';
 
 const names = ['k', 'cracking', 'span', 'leak'] as const;
@@ -45,7 +46,7 @@ export const checkValve = defineKind({
       0.35 * BAR,
       [0, 100 * BAR],
       'Pressure difference at which it starts to open.',
-      TYPICAL,
+      S.TYPICAL,
       {
         typical: [0.2 * BAR, 5 * BAR],
         equation: LAW,
@@ -59,7 +60,7 @@ export const checkValve = defineKind({
       60 * LITRE_PER_MINUTE,
       [0.1 * LITRE_PER_MINUTE, 5000 * LITRE_PER_MINUTE],
       'Flow at the rated drop, fully open.',
-      PRACTICE,
+      S.PRACTICE,
       { equation: LAW },
     ),
     number(
@@ -70,7 +71,7 @@ export const checkValve = defineKind({
       2 * BAR,
       [0.1 * BAR, 200 * BAR],
       'Pressure drop at the rated flow; above the cracking pressure.',
-      PRACTICE,
+      S.PRACTICE,
       { equation: LAW },
     ),
     raw('flowCoefficient', 'Flow coefficient, open (raw)', 'flowCoefficient', [1e-12, 1e-2], 'Kc.', LAW),
@@ -127,7 +128,7 @@ export const checkValve = defineKind({
       'K coefficient of the open valve, S smooth step from 0 to 1 over the span, Kleak of the closed seat',
       ['crackingPressure', 'ratedFlow', 'ratedDrop', 'A.pressure', 'B.pressure'],
       'Static: no poppet mass; linear within 0.1 bar.',
-      'orifice equation, reference sheet O1–O7',
+      S.ORIFICE,
     ),
     dropReading,
   ],

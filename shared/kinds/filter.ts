@@ -1,7 +1,8 @@
 import { orifice, orificeSlope, smoothStep, smoothStepSlope } from '../numerics/smooth.ts';
 import { coefficient, inputValue } from './access.ts';
-import { BAR, indices, LITRE_PER_MINUTE, number, PRACTICE, settingInput } from './build.ts';
+import { BAR, indices, LITRE_PER_MINUTE, number, settingInput } from './build.ts';
 import { type Block, defineKind, type Workspace } from './kind.ts';
+import * as S from './sources.ts';
 import { dropAcross, dropReading, flowReading, passFlow, passSlope, throughEntries } from './two-port.ts';
 
 const names = ['element', 'bypass', 'opens'] as const;
@@ -51,7 +52,7 @@ export const filter = defineKind({
       60 * LITRE_PER_MINUTE,
       [0.1 * LITRE_PER_MINUTE, 5000 * LITRE_PER_MINUTE],
       'Flow at the rated drop with a clean element.',
-      PRACTICE,
+      S.PRACTICE,
       { equation: LAW },
     ),
     number(
@@ -62,10 +63,10 @@ export const filter = defineKind({
       0.5 * BAR,
       [0.02 * BAR, 20 * BAR],
       'Pressure drop of the clean element at the rated flow.',
-      PRACTICE,
+      S.PRACTICE,
       { equation: LAW },
     ),
-    number('setting', 'clogging', 'Clogging', 'fraction', 0, [0, 1], '0 clean, 1 wholly blocked.', PRACTICE, { equation: LAW }),
+    number('setting', 'clogging', 'Clogging', 'fraction', 0, [0, 1], '0 clean, 1 wholly blocked.', S.PRACTICE, { equation: LAW }),
     number(
       'plate',
       'bypassPressure',
@@ -74,7 +75,7 @@ export const filter = defineKind({
       2 * BAR,
       [0.2 * BAR, 50 * BAR],
       'Pressure difference at which the bypass starts to open.',
-      PRACTICE,
+      S.PRACTICE,
       { equation: LAW },
     ),
     number(
@@ -85,7 +86,7 @@ export const filter = defineKind({
       null,
       [0.5 * BAR, 1000 * BAR],
       'Highest pressure at the inlet.',
-      PRACTICE,
+      S.PRACTICE,
       { ratingOf: 'A.pressure' },
     ),
   ],
@@ -128,7 +129,7 @@ export const filter = defineKind({
     {
       id: 'bypass',
       rises: 'filter bypass opens',
-      falls: 'filter bypass closes',
+      falls: '',
       value: (block, i, w) => dropAcross(block, i, w) - coefficient(block, i, C.opens),
     },
   ],
@@ -139,7 +140,7 @@ export const filter = defineKind({
       'K coefficient of the clean element, Kbypass of the open bypass, S smooth step from 0 to 1',
       ['clogging', 'ratedFlow', 'ratedDrop', 'bypassPressure', 'A.pressure', 'B.pressure'],
       'Real elements are partly laminar and drop more in cold oil.',
-      'orifice equation, reference sheet O1–O6',
+      S.ORIFICE,
     ),
     dropReading,
     {
@@ -153,7 +154,7 @@ export const filter = defineKind({
         inputs: ['bypassPressure', 'drop'],
         assumptions: ['The open bypass passes the rated flow 1 bar above its opening pressure.'],
         limits: 'Static: no poppet mass.',
-        source: 'orifice equation, reference sheet O1–O6',
+        source: S.ORIFICE,
       },
     },
   ],

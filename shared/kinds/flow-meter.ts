@@ -1,7 +1,8 @@
 import { orifice, orificeSlope } from '../numerics/smooth.ts';
 import { coefficient } from './access.ts';
-import { BAR, LITRE_PER_MINUTE, number, PRACTICE } from './build.ts';
+import { BAR, LITRE_PER_MINUTE, number } from './build.ts';
 import { type Block, defineKind, type Workspace } from './kind.ts';
+import * as S from './sources.ts';
 import { dropAcross, dropReading, flowReading, passFlow, passSlope, throughEntries } from './two-port.ts';
 
 const names = ['k'] as const;
@@ -29,7 +30,7 @@ export const flowMeter = defineKind({
       60 * LITRE_PER_MINUTE,
       [0.1 * LITRE_PER_MINUTE, 5000 * LITRE_PER_MINUTE],
       'Flow at the rated drop; the end of its scale.',
-      PRACTICE,
+      S.PRACTICE,
       { equation: LAW, ratingOf: 'flow' },
     ),
     number(
@@ -40,7 +41,7 @@ export const flowMeter = defineKind({
       0.5 * BAR,
       [0.02 * BAR, 20 * BAR],
       'Pressure drop at the rated flow.',
-      PRACTICE,
+      S.PRACTICE,
       { equation: LAW },
     ),
   ],
@@ -74,7 +75,7 @@ export const flowMeter = defineKind({
       'K coefficient of the meter, Δp drop from A to B',
       ['ratedFlow', 'ratedDrop', 'A.pressure', 'B.pressure'],
       'No meter error and no lag.',
-      'orifice equation, reference sheet O1–O6',
+      S.ORIFICE,
     ),
     dropReading,
   ],

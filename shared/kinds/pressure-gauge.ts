@@ -1,6 +1,7 @@
 import { coefficient, portValue, stateValue } from './access.ts';
-import { BAR, indices, number, PRACTICE } from './build.ts';
+import { BAR, indices, number } from './build.ts';
 import { defineKind } from './kind.ts';
+import * as S from './sources.ts';
 
 const names = ['lag', 'range'] as const;
 const C = indices(names);
@@ -23,10 +24,10 @@ export const pressureGauge = defineKind({
       250 * BAR,
       [1 * BAR, 1600 * BAR],
       'Highest pressure on the dial; more may damage the gauge.',
-      PRACTICE,
+      S.PRACTICE,
       { ratingOf: 'truePressure' },
     ),
-    number('plate', 'lag', 'Snubber lag', 'time', 0.05, [1e-3, 10], 'Time constant with which the needle follows.', PRACTICE, {
+    number('plate', 'lag', 'Snubber lag', 'time', 0.05, [1e-3, 10], 'Time constant with which the needle follows.', S.PRACTICE, {
       equation: 'd(shown)/dt = (p − shown)/lag',
       typical: [0.02, 0.5],
     }),
@@ -79,7 +80,7 @@ export const pressureGauge = defineKind({
         inputs: ['lag', 'truePressure'],
         assumptions: ['The needle has no friction and no error.'],
         limits: 'Peaks shorter than the lag are not seen.',
-        source: PRACTICE,
+        source: S.PRACTICE,
       },
     },
     {
@@ -93,7 +94,7 @@ export const pressureGauge = defineKind({
         inputs: ['M.pressure'],
         assumptions: ['One pressure in the whole net.'],
         limits: 'Waves inside a line are not resolved.',
-        source: 'continuity with the effective modulus, reference sheet section 8',
+        source: S.CONTINUITY,
       },
     },
   ],

@@ -1,7 +1,8 @@
 import { orifice, orificeSlope } from '../numerics/smooth.ts';
 import { coefficient, inputValue } from './access.ts';
-import { BAR, indices, LITRE_PER_MINUTE, number, PRACTICE, raw, settingInput } from './build.ts';
+import { BAR, indices, LITRE_PER_MINUTE, number, raw, settingInput } from './build.ts';
 import { type Block, defineKind, type Workspace } from './kind.ts';
+import * as S from './sources.ts';
 import { dropAcross, dropReading, flowReading, passFlow, passSlope, throughEntries } from './two-port.ts';
 
 const names = ['k'] as const;
@@ -30,9 +31,9 @@ export const throttle = defineKind({
   about:
     'A sharp-edged adjustable restriction, the same in both directions: flow goes with the opening and the square root of the pressure drop. It sheds power as heat. Viscosity has no influence on it here.',
   parameters: [
-    number('setting', 'opening', 'Opening', 'fraction', 1, [0, 1], 'Share of the full opening.', PRACTICE, { equation: LAW }),
-    number('detail', 'leastOpening', 'Opening, least', 'fraction', 0, [0, 1], 'Lower end of the adjustable range.', PRACTICE),
-    number('detail', 'mostOpening', 'Opening, most', 'fraction', 1, [0, 1], 'Upper end of the adjustable range.', PRACTICE),
+    number('setting', 'opening', 'Opening', 'fraction', 1, [0, 1], 'Share of the full opening.', S.PRACTICE, { equation: LAW }),
+    number('detail', 'leastOpening', 'Opening, least', 'fraction', 0, [0, 1], 'Lower end of the adjustable range.', S.PRACTICE),
+    number('detail', 'mostOpening', 'Opening, most', 'fraction', 1, [0, 1], 'Upper end of the adjustable range.', S.PRACTICE),
     number(
       'detail',
       'openingPerTurn',
@@ -41,7 +42,7 @@ export const throttle = defineKind({
       0.2,
       [0.001, 1],
       'Change of the opening for one turn in (smaller).',
-      PRACTICE,
+      S.PRACTICE,
     ),
     number(
       'plate',
@@ -51,7 +52,7 @@ export const throttle = defineKind({
       60 * LITRE_PER_MINUTE,
       [0.01 * LITRE_PER_MINUTE, 5000 * LITRE_PER_MINUTE],
       'Flow at the rated drop, fully open.',
-      PRACTICE,
+      S.PRACTICE,
       { equation: LAW },
     ),
     number(
@@ -62,10 +63,10 @@ export const throttle = defineKind({
       10 * BAR,
       [0.05 * BAR, 500 * BAR],
       'Pressure drop at the rated flow, fully open.',
-      PRACTICE,
+      S.PRACTICE,
       { equation: LAW },
     ),
-    number('plate', 'ratedPressure', 'Rated pressure', 'pressure', null, [1 * BAR, 1000 * BAR], 'Highest pressure at port A.', PRACTICE, {
+    number('plate', 'ratedPressure', 'Rated pressure', 'pressure', null, [1 * BAR, 1000 * BAR], 'Highest pressure at port A.', S.PRACTICE, {
       ratingOf: 'A.pressure',
     }),
     raw('flowCoefficient', 'Flow coefficient, fully open (raw)', 'flowCoefficient', [1e-12, 1e-2], 'K.', LAW),
@@ -113,7 +114,7 @@ export const throttle = defineKind({
       'K coefficient fully open, Δp drop from A to B',
       ['opening', 'ratedFlow', 'ratedDrop', 'A.pressure', 'B.pressure'],
       'Sharp edge: no influence of viscosity; linear within 0.1 bar; a shut throttle still passes a millionth.',
-      'orifice equation, reference sheet O1–O6',
+      S.ORIFICE,
     ),
     dropReading,
   ],

@@ -1,5 +1,6 @@
 import { pushedOut } from './access.ts';
 import type { Block, ReadingSpec, Workspace } from './kind.ts';
+import * as S from './sources.ts';
 
 /** What every part with just an inlet A and an outlet B shares: one flow from A to B that depends on their pressures. */
 
@@ -68,6 +69,6 @@ export const dropReading: ReadingSpec = {
     inputs: ['A.pressure', 'B.pressure'],
     assumptions: [],
     limits: 'Each port shows the pressure of its net; a net has one pressure.',
-    source: 'definition',
+    source: S.DEFINITION,
   },
 };

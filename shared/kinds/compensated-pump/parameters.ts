@@ -1,15 +1,6 @@
-import {
-  BAR,
-  CUBIC_CENTIMETRE_PER_TURN as CC,
-  LITRE_PER_MINUTE,
-  number,
-  PRACTICE,
-  raw,
-  settingInput,
-  TURN_PER_MINUTE,
-  TYPICAL,
-} from '../build.ts';
+import { BAR, CUBIC_CENTIMETRE_PER_TURN as CC, LITRE_PER_MINUTE, number, raw, settingInput, TURN_PER_MINUTE } from '../build.ts';
 import type { FaultSpec, InputSpec, ParameterSpec, ScrewSpec } from '../kind.ts';
+import * as S from '../sources.ts';
 
 /** Nameplate, screws, faults and inputs of the pressure-compensated piston pump. */
 
@@ -26,7 +17,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     28 * CC,
     [1 * CC, 1000 * CC],
     'Oil moved per turn at full stroke.',
-    TYPICAL,
+    S.TYPICAL,
     {
       typical: [10 * CC, 140 * CC],
       equation: 'ideal flow Q = α·D·w; ideal torque T = α·D·Δp; α stroke fraction',
@@ -40,7 +31,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     190 * BAR,
     [5 * BAR, 700 * BAR],
     'Pressure at which the pump has gone to zero flow (dead-head). A control, not a safety device.',
-    TYPICAL,
+    S.TYPICAL,
     { equation: COMMAND },
   ),
   number(
@@ -51,7 +42,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     28 * CC,
     [0.1 * CC, 1000 * CC],
     'Largest displacement the stop screw allows (EU: stroke limiter). It changes flow and torque, not dead-head pressure.',
-    'reference sheet, P12, P18',
+    S.STOP,
     { equation: 'stop fraction = stop ÷ displacement; knee = setting − band × stop fraction' },
   ),
   number(
@@ -62,7 +53,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     0,
     [0, 500 * CC],
     'Least displacement: above zero the pump can no longer go to zero flow, and only the relief limits pressure.',
-    PRACTICE,
+    S.PRACTICE,
     {
       equation: COMMAND,
     },
@@ -75,7 +66,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     20 * BAR,
     [1 * BAR, 700 * BAR],
     'Lower end of the adjustable range.',
-    TYPICAL,
+    S.TYPICAL,
   ),
   number(
     'detail',
@@ -85,7 +76,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     280 * BAR,
     [5 * BAR, 700 * BAR],
     'Upper end of the adjustable range.',
-    PRACTICE,
+    S.PRACTICE,
   ),
   number(
     'detail',
@@ -95,7 +86,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     7 * CC,
     [0.1 * CC, 1000 * CC],
     'Smallest stop that the screw can reach.',
-    'reference sheet, P12',
+    S.STOP,
   ),
   number(
     'detail',
@@ -105,7 +96,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     28 * CC,
     [0.1 * CC, 1000 * CC],
     'Largest stop that the screw can reach.',
-    'reference sheet, P12',
+    S.STOP,
   ),
   number(
     'detail',
@@ -115,7 +106,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     0,
     [0, 500 * CC],
     'Smallest minimum that the screw can reach.',
-    PRACTICE,
+    S.PRACTICE,
   ),
   number(
     'detail',
@@ -125,7 +116,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     14 * CC,
     [0, 1000 * CC],
     'Largest minimum that the screw can reach.',
-    PRACTICE,
+    S.PRACTICE,
   ),
   number(
     'detail',
@@ -135,7 +126,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     20 * BAR,
     [0.1 * BAR, 300 * BAR],
     'Change of the setting for one turn in.',
-    PRACTICE,
+    S.PRACTICE,
   ),
   number(
     'detail',
@@ -145,7 +136,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     4 * CC,
     [0.01 * CC, 500 * CC],
     'Change of the stop for one turn in (smaller).',
-    'reference sheet, P12 (2.5 cm³/rev per turn on one pump)',
+    S.STOP,
   ),
   number(
     'detail',
@@ -155,7 +146,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     4 * CC,
     [0.01 * CC, 500 * CC],
     'Change of the minimum for one turn in (larger).',
-    PRACTICE,
+    S.PRACTICE,
   ),
   number(
     'plate',
@@ -165,7 +156,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     8 * BAR,
     [0.5 * BAR, 100 * BAR],
     'Pressure between the start of destroking from full stroke and dead-head.',
-    'reference sheet, C1, C2 (3–7 % of the setting)',
+    S.COMPENSATOR,
     {
       typical: [5 * BAR, 15 * BAR],
       equation: COMMAND,
@@ -179,7 +170,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     0.012,
     [5e-4, 2],
     'Time constant of going off stroke: a third of the catalogue time for the whole stroke.',
-    'reference sheet, C6',
+    S.STROKE_TIME,
     {
       typical: [0.007, 0.02],
       equation: STROKE_LAG,
@@ -193,7 +184,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     0.03,
     [5e-4, 2],
     'Time constant of coming on stroke: a third of the catalogue time for the whole stroke.',
-    'reference sheet, C6',
+    S.STROKE_TIME,
     {
       typical: [0.013, 0.05],
       equation: STROKE_LAG,
@@ -207,7 +198,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     (0.004 * LITRE_PER_MINUTE) / BAR,
     [0, (1 * LITRE_PER_MINUTE) / BAR],
     'Oil that slips from outlet to case drain, per bar, with ISO VG 46 at 40 °C; scales with viscosity.',
-    'reference sheet, L5, L6 (2 % of ideal flow at the rated point)',
+    S.CASE_DRAIN,
     { equation: 'leakage flow = kLeak·(p outlet − p case drain)·μ_ref/μ' },
   ),
   number(
@@ -218,7 +209,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     0.94,
     [0.5, 0.999],
     'Ideal torque ÷ real torque at full stroke, 200 bar and 1500 rpm, with ISO VG 46 at 40 °C.',
-    TYPICAL,
+    S.TYPICAL,
     {
       typical: [0.88, 0.96],
       equation: LOSS,
@@ -232,7 +223,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     1800 * TURN_PER_MINUTE,
     [100 * TURN_PER_MINUTE, 10000 * TURN_PER_MINUTE],
     'Speed at which filling falls from full to none between 0.5 and 0.2 bar absolute at the inlet.',
-    PRACTICE,
+    S.PRACTICE,
     {
       equation: 'both limits go with the square of speed',
     },
@@ -245,7 +236,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     null,
     [1 * BAR, 1000 * BAR],
     'Highest outlet pressure the maker allows continuously.',
-    PRACTICE,
+    S.PRACTICE,
     { ratingOf: 'outletPressure' },
   ),
   number(
@@ -256,7 +247,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     null,
     [0.05 * BAR, 50 * BAR],
     'Highest pressure in the pump case.',
-    'reference sheet, section 15 (1 bar above inlet)',
+    S.TYPICAL,
     {
       ratingOf: 'drain.pressure',
     },
@@ -269,7 +260,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     0.0017,
     [1e-6, 10],
     'Inertia of the rotating group and coupling half.',
-    TYPICAL,
+    S.TYPICAL,
   ),
   number(
     'detail',
@@ -279,7 +270,7 @@ export const pumpParameters: readonly ParameterSpec[] = [
     5e-5,
     [0, 0.01],
     'Oil inside the pump behind the outlet port.',
-    PRACTICE,
+    S.PRACTICE,
   ),
   raw('leakage', 'Leakage (raw)', 'leakage', [0, 1e-8], 'kLeak in m³/s per Pa.'),
   raw('viscousDrag', 'Viscous drag (raw)', 'viscousDrag', [0, 100], 'cV.'),

@@ -1,6 +1,7 @@
 import { coefficient, portValue, pushedOut, stateValue } from '../access.ts';
 import { indices } from '../build.ts';
 import type { Block, Explanation, ReadingSpec, Workspace } from '../kind.ts';
+import * as S from '../sources.ts';
 import { DRAIN, evaluatePump, OUTLET, pumpCoefficients, SHAFT, SUCTION } from './kernel.ts';
 
 const C = indices(pumpCoefficients);
@@ -37,7 +38,7 @@ export const pumpReadings: readonly ReadingSpec[] = [
       'Δp outlet − case drain; lag the destroke lag when falling, the on-stroke lag when rising',
       ['compensatorPressure', 'band', 'maxVolumeStop', 'minVolumeStop', 'destrokeLag', 'onstrokeLag'],
       'First order: the swash plate’s own mass and spool are left out.',
-      'reference sheet, C1–C6',
+      S.COMPENSATOR,
       ['Catalogue stroke times are for the whole stroke: lag = time/3.'],
     ),
   },
@@ -46,7 +47,7 @@ export const pumpReadings: readonly ReadingSpec[] = [
     label: 'Displacement now',
     quantity: 'displacement',
     value: (block, i, w) => stateValue(block, i, 0, w) * coefficient(block, i, C.displacement),
-    explain: explain('Vg = α·D', 'α stroke, D displacement', ['stroke', 'displacement'], '', 'reference sheet, section 2'),
+    explain: explain('Vg = α·D', 'α stroke, D displacement', ['stroke', 'displacement'], '', S.PUMP_FLOW),
   },
   {
     id: 'flow',
@@ -58,7 +59,7 @@ export const pumpReadings: readonly ReadingSpec[] = [
       'α stroke, D displacement, w shaft speed',
       ['stroke', 'displacement', 'leakage', 'filling', 'outletPressure'],
       'No flow ripple.',
-      'reference sheet, P1–P11, L1',
+      S.PUMP_FLOW,
     ),
   },
   {
@@ -71,7 +72,7 @@ export const pumpReadings: readonly ReadingSpec[] = [
       'Δp outlet − suction; cV, Tc0, kTp from the torque efficiency',
       ['stroke', 'displacement', 'torqueEfficiency', 'outletPressure'],
       'Friction does not show the minimum that real pumps have at low speed.',
-      'reference sheet, P4, P5, L1',
+      S.PUMP_LOSS,
       ['Viscous part with the run’s viscosity over that of ISO VG 46 at 40 °C.'],
     ),
   },
@@ -85,7 +86,7 @@ export const pumpReadings: readonly ReadingSpec[] = [
       'kLeak leakage per bar',
       ['leakage', 'outletPressure'],
       'Laminar; no control flow of the compensator.',
-      'reference sheet, L6',
+      S.CASE_DRAIN,
     ),
   },
   {
@@ -98,7 +99,7 @@ export const pumpReadings: readonly ReadingSpec[] = [
       'K effective modulus, V volume of the net',
       ['outlet.pressure'],
       'One pressure in the whole net.',
-      'reference sheet, section 8',
+      S.CONTINUITY,
     ),
   },
   {
@@ -111,7 +112,7 @@ export const pumpReadings: readonly ReadingSpec[] = [
       'atmosphere from the altitude',
       ['suction.pressure'],
       'Warning under 0.8 bar absolute.',
-      'reference sheet, K1, K2',
+      S.INLET,
     ),
   },
   {
@@ -119,14 +120,14 @@ export const pumpReadings: readonly ReadingSpec[] = [
     label: 'Shaft power taken',
     quantity: 'power',
     value: (block, i, w) => torque(block, i, w) * portValue(block, i, SHAFT, w),
-    explain: explain('P = T·w', 'T torque taken, w speed', ['torque'], '', 'reference sheet, U8'),
+    explain: explain('P = T·w', 'T torque taken, w speed', ['torque'], '', S.POWER),
   },
   {
     id: 'hydraulicPower',
     label: 'Hydraulic power',
     quantity: 'power',
     value: (block, i, w) => outletFlow(block, i, w) * (portValue(block, i, OUTLET, w) - portValue(block, i, SUCTION, w)),
-    explain: explain('P = Q·Δp', 'Q flow at the outlet, Δp outlet − suction', ['flow', 'outletPressure'], '', 'reference sheet, U7'),
+    explain: explain('P = Q·Δp', 'Q flow at the outlet, Δp outlet − suction', ['flow', 'outletPressure'], '', S.POWER),
   },
   {
     id: 'filling',
@@ -138,7 +139,7 @@ export const pumpReadings: readonly ReadingSpec[] = [
       'inlet pressure absolute, shaft speed',
       ['suctionPressure', 'ratedSpeed'],
       'A rule of thumb; the maker’s inlet curve prevails.',
-      'common practice, no source; air release reference sheet K4',
+      S.PRACTICE,
     ),
   },
 ];

@@ -1,6 +1,7 @@
 import { coefficient, portValue, stateValue } from '../access.ts';
 import { indices } from '../build.ts';
 import { type Block, defineKind, type Explanation, type Workspace } from '../kind.ts';
+import * as S from '../sources.ts';
 import { cylinderCoefficients, cylinderEntries, cylinderFlow, cylinderJacobian, evaluateCylinder, prepareCylinder } from './kernel.ts';
 import { cylinderFaults, cylinderInputs, cylinderParameters } from './parameters.ts';
 
@@ -78,8 +79,8 @@ export const cylinder = defineKind({
     out.stored += coefficient(block, i, C.mass) * v * q.acceleration + q.stopStored;
   },
   signals: [
-    { id: 'out', rises: 'rod fully out', falls: '', value: (block, i, w) => position(block, i, w) - coefficient(block, i, C.stroke) },
-    { id: 'in', rises: 'rod fully in', falls: '', value: (block, i, w) => -position(block, i, w) },
+    { id: 'out', rises: 'rod fully extended', falls: '', value: (block, i, w) => position(block, i, w) - coefficient(block, i, C.stroke) },
+    { id: 'in', rises: 'rod fully retracted', falls: '', value: (block, i, w) => -position(block, i, w) },
     {
       id: 'work-met',
       rises: 'meets the work',
@@ -118,7 +119,7 @@ export const cylinder = defineKind({
         'x from fully retracted',
         ['velocity', 'startPosition'],
         'A stop gives by a tenth of a millimetre or so.',
-        'Newton’s law',
+        S.NEWTON,
       ),
     },
     {
@@ -131,7 +132,7 @@ export const cylinder = defineKind({
         'AA piston area, AB ring area',
         ['mass', 'capPressure', 'rodPressure', 'loadForce', 'coulomb', 'stiction', 'viscous'],
         'A held rod creeps: the friction’s sign is rounded within 2 mm/s.',
-        'reference sheet, Y1, Y7',
+        S.CYLINDER,
       ),
     },
     {
@@ -144,7 +145,7 @@ export const cylinder = defineKind({
         'positive pushes the rod out',
         ['capPressure', 'rodPressure', 'bore', 'rod'],
         'Before friction.',
-        'reference sheet, Y1, Y2',
+        S.CYLINDER,
       ),
     },
     {
@@ -166,7 +167,7 @@ export const cylinder = defineKind({
       label: 'Cap-side pressure',
       quantity: 'pressure',
       value: (block, i, w) => portValue(block, i, 0, w),
-      explain: explain(CONTINUITY, 'V = dead volume + AA·x', ['A.pressure', 'capDeadVolume'], '', 'reference sheet, section 8'),
+      explain: explain(CONTINUITY, 'V = dead volume + AA·x', ['A.pressure', 'capDeadVolume'], '', S.CONTINUITY),
     },
     {
       id: 'rodPressure',
@@ -178,7 +179,7 @@ export const cylinder = defineKind({
         'V = dead volume + AB·(stroke − x)',
         ['B.pressure', 'rodDeadVolume'],
         'May exceed the cap side: intensification.',
-        'reference sheet, Y4, section 8',
+        S.INTENSIFICATION,
       ),
     },
     {
@@ -186,7 +187,7 @@ export const cylinder = defineKind({
       label: 'Higher of both sides',
       quantity: 'pressure',
       value: (block, i, w) => Math.max(portValue(block, i, 0, w), portValue(block, i, 1, w)),
-      explain: explain('the larger of pA, pB', 'pressures of the two sides', ['capPressure', 'rodPressure'], '', 'definition'),
+      explain: explain('the larger of pA, pB', 'pressures of the two sides', ['capPressure', 'rodPressure'], '', S.DEFINITION),
     },
   ],
   checks: (plate) => {

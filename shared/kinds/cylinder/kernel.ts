@@ -35,6 +35,8 @@ const STOP_DAMPING = 20;
 /** Pressure across the piston by which the faults are measured [Pa], rod speed that a full bypass stops [m/s]. */
 const FAULT_PRESSURE = 100e5;
 const BYPASS_SPEED = 0.1;
+/** Force with which an unloaded rod rests against its stop at the start [N]. */
+const RESTING = 10;
 
 export function prepareCylinder(plate: Plate, run: RunConstants): Record<(typeof cylinderCoefficients)[number], number> {
   const bore = plate.number('bore');
@@ -82,8 +84,8 @@ function startPosition(plate: Plate, c: Loads): number {
   const spring = x > c.springFrom ? c.springRate * (x - c.springFrom) : 0;
   const work = c.workForce * workShare(x, c.workContact, c.workTravel, c.workShape);
   const load = plate.number('loadForce') + c.weight + spring + work;
-  if (x <= 0 && load > 0) return -load / c.stopStiffness;
-  if (x >= stroke && load < 0) return stroke - load / c.stopStiffness;
+  if (x <= 0 && load >= 0) return -Math.max(RESTING, load) / c.stopStiffness;
+  if (x >= stroke && load <= 0) return stroke + Math.max(RESTING, -load) / c.stopStiffness;
   return x;
 }
 

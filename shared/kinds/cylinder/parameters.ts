@@ -1,5 +1,6 @@
-import { BAR, choice, LITRE_PER_MINUTE, number, PRACTICE, raw, TYPICAL } from '../build.ts';
+import { BAR, choice, LITRE_PER_MINUTE, number, raw } from '../build.ts';
 import type { FaultSpec, InputSpec, ParameterSpec } from '../kind.ts';
+import * as S from '../sources.ts';
 
 /** Nameplate, load, faults and inputs of the double-acting cylinder. */
 
@@ -8,11 +9,11 @@ const FRICTION = 'friction = (Fc + (Fs − Fc)/(1 + (v/0.02)²))·sign(v) + b·v
 const WORK = 'work force = force at full·((x − contact)/(full − contact))^shape for x beyond contact, continuing beyond full';
 
 export const cylinderParameters: readonly ParameterSpec[] = [
-  number('plate', 'bore', 'Bore', 'length', 0.063, [0.005, 1], 'Piston diameter.', PRACTICE, { equation: 'AA = π·bore²/4' }),
-  number('plate', 'rod', 'Rod', 'length', 0.036, [0.001, 0.99], 'Rod diameter; smaller than the bore.', PRACTICE, {
+  number('plate', 'bore', 'Bore', 'length', 0.063, [0.005, 1], 'Piston diameter.', S.PRACTICE, { equation: 'AA = π·bore²/4' }),
+  number('plate', 'rod', 'Rod', 'length', 0.036, [0.001, 0.99], 'Rod diameter; smaller than the bore.', S.PRACTICE, {
     equation: 'AB = π·(bore² − rod²)/4',
   }),
-  number('plate', 'stroke', 'Stroke', 'length', 0.5, [0.001, 20], 'Travel between the end stops.', PRACTICE),
+  number('plate', 'stroke', 'Stroke', 'length', 0.5, [0.001, 20], 'Travel between the end stops.', S.PRACTICE),
   number(
     'plate',
     'ratedPressure',
@@ -21,10 +22,10 @@ export const cylinderParameters: readonly ParameterSpec[] = [
     null,
     [1 * BAR, 1000 * BAR],
     'Highest pressure on either side of the piston.',
-    PRACTICE,
+    S.PRACTICE,
     { ratingOf: 'highestPressure' },
   ),
-  number('load', 'mass', 'Moving mass', 'mass', 100, [0.1, 1e6], 'Rod, piston and everything that moves with them.', PRACTICE, {
+  number('load', 'mass', 'Moving mass', 'mass', 100, [0.1, 1e6], 'Rod, piston and everything that moves with them.', S.PRACTICE, {
     equation: MOTION,
   }),
   number(
@@ -35,7 +36,7 @@ export const cylinderParameters: readonly ParameterSpec[] = [
     0,
     [0, 20],
     'Rod travel from fully retracted when the run starts.',
-    'a choice of this run',
+    S.CHOICE,
   ),
   number(
     'load',
@@ -45,40 +46,24 @@ export const cylinderParameters: readonly ParameterSpec[] = [
     0,
     [-Math.PI / 2, Math.PI / 2],
     '0 horizontal; +90° the rod lifts the mass as it comes out; −90° it lowers it.',
-    'a choice of this run',
+    S.CHOICE,
     {
       equation: 'weight = m·g·sin(angle), g = 9.80665 m/s²',
     },
   ),
-  number(
-    'load',
-    'loadForce',
-    'Constant load',
-    'force',
-    0,
-    [-1e8, 1e8],
-    'Force against coming out; negative pulls the rod out.',
-    'a choice of this run',
-    { equation: MOTION },
-  ),
-  number('load', 'springRate', 'Spring rate', 'stiffness', 0, [0, 1e9], 'Spring that pushes the rod back in.', 'a choice of this run', {
+  number('load', 'loadForce', 'Constant load', 'force', 0, [-1e8, 1e8], 'Force against coming out; negative pulls the rod out.', S.CHOICE, {
+    equation: MOTION,
+  }),
+  number('load', 'springRate', 'Spring rate', 'stiffness', 0, [0, 1e9], 'Spring that pushes the rod back in.', S.CHOICE, {
     equation: 'spring force = rate·(x − from), only beyond "from"',
   }),
-  number('load', 'springFrom', 'Spring starts at', 'length', 0, [0, 20], 'Position at which the spring is met.', 'a choice of this run'),
-  number('load', 'workContact', 'Work met at', 'length', 0, [0, 20], 'Position at which the rod meets the work.', 'a choice of this run', {
+  number('load', 'springFrom', 'Spring starts at', 'length', 0, [0, 20], 'Position at which the spring is met.', S.CHOICE),
+  number('load', 'workContact', 'Work met at', 'length', 0, [0, 20], 'Position at which the rod meets the work.', S.CHOICE, {
     equation: WORK,
   }),
-  number(
-    'load',
-    'workFull',
-    'Work done at',
-    'length',
-    0.5,
-    [0, 20],
-    'Position at which the work gives its full force.',
-    'a choice of this run',
-    { equation: WORK },
-  ),
+  number('load', 'workFull', 'Work done at', 'length', 0.5, [0, 20], 'Position at which the work gives its full force.', S.CHOICE, {
+    equation: WORK,
+  }),
   number(
     'load',
     'workForce',
@@ -87,7 +72,7 @@ export const cylinderParameters: readonly ParameterSpec[] = [
     0,
     [0, 1e8],
     'Force at the position where the work is done; 0 means no work. The work springs back with the rod.',
-    'a choice of this run',
+    S.CHOICE,
     { equation: WORK },
   ),
   choice(
@@ -101,7 +86,7 @@ export const cylinderParameters: readonly ParameterSpec[] = [
     ],
     '2',
     'How the force rises: straight like a spring, or ever steeper like a bale.',
-    'a choice of this run',
+    S.CHOICE,
   ),
   number(
     'load',
@@ -111,7 +96,7 @@ export const cylinderParameters: readonly ParameterSpec[] = [
     null,
     [0, 1e8],
     'Force the job needs at the rod; used for verdicts, not in the run. Without it the force of the work counts.',
-    'a choice of this run',
+    S.CHOICE,
   ),
   number(
     'detail',
@@ -121,7 +106,7 @@ export const cylinderParameters: readonly ParameterSpec[] = [
     1500,
     [0, 1e7],
     'Coulomb friction of seals and guides.',
-    `${TYPICAL}: 3 % of the force at rated pressure`,
+    `${S.TYPICAL}: 3 % of the force at rated pressure`,
     { equation: FRICTION },
   ),
   number(
@@ -132,10 +117,10 @@ export const cylinderParameters: readonly ParameterSpec[] = [
     2250,
     [0, 1e7],
     'Friction at standstill; at least the sliding friction.',
-    `${TYPICAL}: 1.5 × sliding`,
+    `${S.TYPICAL}: 1.5 × sliding`,
     { equation: FRICTION },
   ),
-  number('detail', 'viscous', 'Friction, viscous', 'damping', 1000, [0, 1e7], 'Friction that grows with speed.', TYPICAL, {
+  number('detail', 'viscous', 'Friction, viscous', 'damping', 1000, [0, 1e7], 'Friction that grows with speed.', S.TYPICAL, {
     typical: [200, 10000],
     equation: FRICTION,
   }),
@@ -147,7 +132,7 @@ export const cylinderParameters: readonly ParameterSpec[] = [
     0,
     [0, (10 * LITRE_PER_MINUTE) / BAR],
     'Leakage past the piston per bar, with ISO VG 46 at 40 °C; none with soft seals.',
-    TYPICAL,
+    S.TYPICAL,
     {
       equation: 'q = kCyl·(pA − pB)·μ_ref/μ',
     },
@@ -160,7 +145,7 @@ export const cylinderParameters: readonly ParameterSpec[] = [
     5e-5,
     [1e-6, 0.1],
     'Oil behind the piston when fully retracted.',
-    PRACTICE,
+    S.PRACTICE,
   ),
   number(
     'detail',
@@ -170,7 +155,7 @@ export const cylinderParameters: readonly ParameterSpec[] = [
     5e-5,
     [1e-6, 0.1],
     'Oil on the rod side when fully extended.',
-    PRACTICE,
+    S.PRACTICE,
   ),
   raw('crossLeakage', 'Piston leakage (raw)', 'leakage', [0, 1e-6], 'kCyl in m³/s per Pa.'),
   raw('stopStiffness', 'End-stop stiffness (raw)', 'stiffness', [1e5, 1e12], 'kStop; 1e8 N/m unless given.'),

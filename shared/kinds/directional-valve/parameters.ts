@@ -1,5 +1,6 @@
-import { BAR, choice, LITRE_PER_MINUTE, number, PRACTICE, raw, TYPICAL } from '../build.ts';
+import { BAR, choice, LITRE_PER_MINUTE, number, raw } from '../build.ts';
 import type { ParameterSpec, PortSpec } from '../kind.ts';
+import * as S from '../sources.ts';
 
 /** What the 4/3 and the 4/2 valve have in common. */
 
@@ -14,7 +15,7 @@ export const valveParameters: readonly ParameterSpec[] = [
     60 * LITRE_PER_MINUTE,
     [0.1 * LITRE_PER_MINUTE, 5000 * LITRE_PER_MINUTE],
     'Flow through one edge, fully shifted, at the rated drop.',
-    PRACTICE,
+    S.PRACTICE,
     { equation: EDGE },
   ),
   number(
@@ -25,7 +26,7 @@ export const valveParameters: readonly ParameterSpec[] = [
     5 * BAR,
     [0.05 * BAR, 100 * BAR],
     'Pressure drop across one edge at the rated flow.',
-    TYPICAL,
+    S.TYPICAL,
     {
       typical: [2 * BAR, 10 * BAR],
       equation: EDGE,
@@ -39,12 +40,22 @@ export const valveParameters: readonly ParameterSpec[] = [
     (2.5e-4 * LITRE_PER_MINUTE) / BAR,
     [0, (0.1 * LITRE_PER_MINUTE) / BAR],
     'Leakage of a closed edge at 200 bar divided by 200 bar (50 mL/min at 200 bar), with ISO VG 46 at 40 °C.',
-    TYPICAL,
+    S.TYPICAL,
     { equation: 'K of the closed edge = leakage·√(200 bar)·μ_ref/μ' },
   ),
-  number('plate', 'ratedPressure', 'Rated pressure', 'pressure', null, [1 * BAR, 1000 * BAR], 'Highest pressure at P, A or B.', PRACTICE, {
-    ratingOf: 'highestPressure',
-  }),
+  number(
+    'plate',
+    'ratedPressure',
+    'Rated pressure',
+    'pressure',
+    null,
+    [1 * BAR, 1000 * BAR],
+    'Highest pressure at P, A or B.',
+    S.PRACTICE,
+    {
+      ratingOf: 'highestPressure',
+    },
+  ),
   raw('edge', 'Edge coefficient (raw)', 'flowCoefficient', [1e-12, 1e-2], 'Kd: an edge fully open.', EDGE),
   raw('edgeLeakage', 'Closed-edge coefficient (raw)', 'flowCoefficient', [0, 1e-6], 'Kdl: an edge closed.', EDGE),
 ];
@@ -62,7 +73,7 @@ export const centreParameters: readonly ParameterSpec[] = [
     ],
     'tandem',
     'Which ports the spool joins when neither solenoid is on. A spool does not hold a load in any of them.',
-    'ISO 1219-1 (centre positions)',
+    S.SYMBOLS,
   ),
   raw('centre', 'Centre coefficient (raw)', 'flowCoefficient', [0, 1e-2], 'Kpt: an edge that the centre joins.', EDGE),
 ];

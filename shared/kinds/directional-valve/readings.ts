@@ -1,9 +1,10 @@
 import { inputValue, portValue, pushedOut } from '../access.ts';
 import type { ReadingSpec } from '../kind.ts';
+import * as S from '../sources.ts';
 import { A, B, P, T, valveHeat } from './kernel.ts';
 
 const EDGES = 'Q = K·opening·√Δp through each edge, linear within 0.2 bar';
-const SOURCE = 'orifice equation, reference sheet O1–O7';
+const SOURCE = S.ORIFICE;
 
 function portFlow(id: string, letter: string, port: number): ReadingSpec {
   return {
@@ -34,7 +35,7 @@ export const valveReadings: readonly ReadingSpec[] = [
       inputs: ['spool'],
       assumptions: ['Shifting takes the flag’s ramp, usually 40 to 60 ms.'],
       limits: '',
-      source: 'reference sheet, section 15',
+      source: S.TYPICAL,
     },
   },
   portFlow('flowP', 'P', P),
@@ -52,7 +53,7 @@ export const valveReadings: readonly ReadingSpec[] = [
       inputs: ['flowP', 'flowA', 'flowB', 'flowT'],
       assumptions: [],
       limits: '',
-      source: 'reference sheet, R8',
+      source: S.THROTTLING_HEAT,
     },
   },
   {
@@ -66,7 +67,7 @@ export const valveReadings: readonly ReadingSpec[] = [
       inputs: ['P.pressure', 'A.pressure', 'B.pressure'],
       assumptions: [],
       limits: '',
-      source: 'definition',
+      source: S.DEFINITION,
     },
   },
 ];

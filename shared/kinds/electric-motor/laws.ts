@@ -25,7 +25,7 @@ export interface TorqueRatios {
 }
 
 /** Least torques of a design N motor, per cent of rated: up to a rated power [W]; locked rotor, pull-up, pull-out.
- *  2 and 4 poles: reference sheet M11, from 22 kW on the values for the larger frames kept there from memory.
+ *  2 and 4 poles up to 16 kW: IEC design N as quoted by an engineering handbook; larger frames from memory.
  *  6 and 8 poles were not read: set a step lower, from memory. */
 const minima: Readonly<Record<string, readonly (readonly [upTo: number, locked: number, pullUp: number, pullOut: number])[]>> = {
   '2': [

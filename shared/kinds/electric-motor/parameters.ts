@@ -1,5 +1,6 @@
-import { choice, number, PRACTICE, raw, TURN_PER_MINUTE, TYPICAL } from '../build.ts';
+import { choice, number, raw, TURN_PER_MINUTE } from '../build.ts';
 import type { FaultSpec, InputSpec, ParameterSpec } from '../kind.ts';
+import * as S from '../sources.ts';
 
 /** Nameplate, faults and inputs of the three-phase induction motor. */
 
@@ -7,14 +8,14 @@ const KLOSS = 'T = 2·Tb·u²·s·sk/(s² + sk²); Tb pull-out torque, sk pull-o
 const RELAY = 'dθ/dt = ((I/(k·dial))² − θ)/τ; trips at θ = 1';
 
 export const motorParameters: readonly ParameterSpec[] = [
-  number('plate', 'ratedPower', 'Rated power', 'power', 5500, [50, 1e6], 'Shaft power on the nameplate.', PRACTICE, {
+  number('plate', 'ratedPower', 'Rated power', 'power', 5500, [50, 1e6], 'Shaft power on the nameplate.', S.PRACTICE, {
     equation: 'rated torque Tn = P/(2π·n/60)',
     typical: [750, 75e3],
   }),
-  number('plate', 'ratedVoltage', 'Rated voltage', 'voltage', 400, [50, 1000], 'Line voltage on the nameplate.', PRACTICE, {
+  number('plate', 'ratedVoltage', 'Rated voltage', 'voltage', 400, [50, 1000], 'Line voltage on the nameplate.', S.PRACTICE, {
     equation: 'torque goes with (V/Vn)²',
   }),
-  number('plate', 'ratedFrequency', 'Rated frequency', 'frequency', 50, [10, 100], 'Supply frequency on the nameplate.', PRACTICE, {
+  number('plate', 'ratedFrequency', 'Rated frequency', 'frequency', 50, [10, 100], 'Supply frequency on the nameplate.', S.PRACTICE, {
     equation: 'synchronous speed = 120·f/poles rpm',
   }),
   choice(
@@ -29,7 +30,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     ],
     '4',
     'Number of poles: sets the synchronous speed (4 poles: 1500 rpm at 50 Hz, 1800 rpm at 60 Hz).',
-    'reference sheet, M1',
+    S.SYNCHRONOUS,
   ),
   number(
     'plate',
@@ -39,7 +40,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     1450 * TURN_PER_MINUTE,
     [100 * TURN_PER_MINUTE, 6000 * TURN_PER_MINUTE],
     'Speed at full load on the nameplate; must lie below synchronous speed.',
-    'reference sheet, M1 (full-load slip 1–5 %)',
+    S.SYNCHRONOUS,
     { equation: 'rated slip sn = 1 − n/ns' },
   ),
   number(
@@ -50,7 +51,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     11,
     [0.1, 2000],
     'Line current at full load on the nameplate.',
-    PRACTICE,
+    S.PRACTICE,
     {
       equation: 'I² = I0² + rotor part²; at full load I is the nameplate current',
     },
@@ -63,7 +64,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     4.8,
     [0.05, 1500],
     'Line current with the shaft running free: the magnetising part.',
-    PRACTICE,
+    S.PRACTICE,
     {
       equation: 'I² = I0² + rotor part²',
     },
@@ -76,7 +77,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     6,
     [2, 12],
     'Current at standstill ÷ full-load current.',
-    'reference sheet, M9/M10',
+    S.ROTOR_CURRENT,
     {
       typical: [5.4, 6.7],
     },
@@ -91,7 +92,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     ],
     'N minima',
     'Without a torque curve from the maker the least values that a design N motor of this size must reach are used; a real motor usually has more.',
-    'reference sheet, M11',
+    S.MINIMA,
   ),
   number(
     'detail',
@@ -101,7 +102,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     2,
     [1.1, 6],
     'Highest torque ÷ rated torque (US: breakdown). Used when the torque curve is entered.',
-    'reference sheet, M11',
+    S.MINIMA,
     {
       typical: [1.75, 3],
       equation: KLOSS,
@@ -115,7 +116,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     1.1,
     [0.2, 5],
     'Lowest torque between standstill and pull-out ÷ rated torque. Used when entered.',
-    'reference sheet, M11',
+    S.MINIMA,
     {
       typical: [1, 1.5],
     },
@@ -128,7 +129,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     1.6,
     [0.2, 6],
     'Torque at standstill ÷ rated torque. Used when entered.',
-    'reference sheet, M11',
+    S.MINIMA,
     {
       typical: [1.4, 2.75],
     },
@@ -141,12 +142,12 @@ export const motorParameters: readonly ParameterSpec[] = [
     1,
     [1, 1.5],
     'Continuous load allowed ÷ rated load, at rated volts and frequency. IEC motors 1.0; US open motors often 1.15.',
-    'reference sheet, M18',
+    S.SERVICE_FACTOR,
     {
       typical: [1, 1.25],
     },
   ),
-  number('detail', 'inertia', 'Rotor inertia', 'inertia', 0.02, [1e-5, 100], 'Inertia of the rotor and coupling.', TYPICAL, {
+  number('detail', 'inertia', 'Rotor inertia', 'inertia', 0.02, [1e-5, 100], 'Inertia of the rotor and coupling.', S.TYPICAL, {
     equation: 'J·dw/dt = sum of torques',
   }),
   number(
@@ -157,7 +158,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     0.002,
     [0, 1],
     'Drag of fan and bearings, beside the torque curve.',
-    PRACTICE,
+    S.PRACTICE,
     {
       equation: 'drag torque = drag·w',
     },
@@ -172,7 +173,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     ],
     'closed',
     'Whether the motor is already switched on when the run starts; flags on the tape switch it from then on.',
-    'a choice of this run',
+    S.CHOICE,
   ),
   choice(
     'plate',
@@ -184,7 +185,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     ],
     'yes',
     'A thermal overload relay opens the contactor when it has warmed up to its trip point.',
-    PRACTICE,
+    S.PRACTICE,
   ),
   number(
     'setting',
@@ -194,7 +195,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     11,
     [0.1, 2000],
     'Current at which the relay is set; normally the nameplate current.',
-    PRACTICE,
+    S.PRACTICE,
     { equation: RELAY },
   ),
   choice(
@@ -208,7 +209,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     ],
     '10',
     'How long the relay lets a heavy start run: IEC at 7.2 × dial, NEMA at 6 × dial.',
-    'reference sheet, M14, M16',
+    S.RELAY,
   ),
   choice(
     'plate',
@@ -220,7 +221,7 @@ export const motorParameters: readonly ParameterSpec[] = [
     ],
     'IEC',
     'An IEC dial trips in the end above about 1.15 × dial, a NEMA one above 1.25 × dial.',
-    'reference sheet, M14, M16',
+    S.RELAY,
   ),
   raw('pullOutTorque', 'Pull-out torque (raw)', 'torque', [0.01, 1e5], 'Highest torque of the curve.', KLOSS),
   raw('pullOutSlip', 'Pull-out slip (raw)', 'number', [0.005, 0.9], 'Slip at which the highest torque is reached.', KLOSS),

@@ -1,6 +1,7 @@
 import { coefficient, portValue, pushedOut, stateValue } from '../access.ts';
 import { indices } from '../build.ts';
 import type { Explanation, ReadingSpec } from '../kind.ts';
+import * as S from '../sources.ts';
 import { evaluateMotor, motorCoefficients } from './curve.ts';
 
 const C = indices(motorCoefficients);
@@ -16,8 +17,8 @@ function explain(
   return { equation, where, inputs, assumptions, limits, source };
 }
 
-const CURVE = 'Kloss equation and torque minima of design N, reference sheet M2–M6, M11';
-const QUADRATURE = 'equivalent circuit reduced to two plate points, reference sheet M9, M10';
+const CURVE = `${S.MOTOR_CURVE}; ${S.MINIMA}`;
+const QUADRATURE = S.ROTOR_CURRENT;
 
 export const motorReadings: readonly ReadingSpec[] = [
   {
@@ -30,7 +31,7 @@ export const motorReadings: readonly ReadingSpec[] = [
       'J inertia of everything on the shaft, w speed',
       ['inertia', 'torque'],
       'One stiff shaft.',
-      'Newton’s law',
+      S.NEWTON,
     ),
   },
   {
@@ -60,7 +61,7 @@ export const motorReadings: readonly ReadingSpec[] = [
       'P rated power, n rated speed',
       ['torque', 'ratedPower', 'ratedSpeed'],
       'Means nothing below pull-out speed.',
-      'reference sheet, U8',
+      S.POWER,
     ),
   },
   {
@@ -94,7 +95,7 @@ export const motorReadings: readonly ReadingSpec[] = [
     label: 'Shaft power',
     quantity: 'power',
     value: (block, i, w) => pushedOut(block, i, 0, w) * portValue(block, i, 0, w),
-    explain: explain('P = T·w', 'T shaft torque, w speed', ['torque', 'speed'], '', 'reference sheet, U8'),
+    explain: explain('P = T·w', 'T shaft torque, w speed', ['torque', 'speed'], '', S.POWER),
   },
   {
     id: 'slip',
@@ -106,7 +107,7 @@ export const motorReadings: readonly ReadingSpec[] = [
       'ws synchronous speed at the supply frequency',
       ['speed', 'poles', 'supplyFrequency'],
       '',
-      'reference sheet, M1',
+      S.SYNCHRONOUS,
     ),
   },
   {
@@ -119,7 +120,7 @@ export const motorReadings: readonly ReadingSpec[] = [
       'k 1.15 for an IEC dial, 1.25 for NEMA; τ from the trip class; three times slower with the contactor open',
       ['current', 'relayDial', 'relayClass', 'relayStandard'],
       'One body of heat; real relays scatter across their class.',
-      'reference sheet, M14, M16',
+      S.RELAY,
       ['Cold at the start of the run.', 'Reset by hand.'],
     ),
   },

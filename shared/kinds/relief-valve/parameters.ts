@@ -1,5 +1,6 @@
-import { BAR, choice, LITRE_PER_MINUTE, number, PRACTICE, raw, settingInput, TYPICAL } from '../build.ts';
+import { BAR, choice, LITRE_PER_MINUTE, number, raw, settingInput } from '../build.ts';
 import type { FaultSpec, InputSpec, ParameterSpec, ScrewSpec } from '../kind.ts';
+import * as S from '../sources.ts';
 
 /** Nameplate, screw, faults and inputs of the relief valve, direct-acting or pilot-operated. */
 
@@ -18,7 +19,7 @@ export const reliefParameters: readonly ParameterSpec[] = [
     ],
     'pilot',
     'Direct-acting valves are fast with a large override, pilot-operated ones slower with a small one. The figures below count; this word chooses the symbol.',
-    'reference sheet, R5',
+    S.RELIEF,
   ),
   number(
     'setting',
@@ -28,7 +29,7 @@ export const reliefParameters: readonly ParameterSpec[] = [
     210 * BAR,
     [2 * BAR, 1000 * BAR],
     'Pressure at which the valve passes the flow it was set with. It starts to open lower, at cracking.',
-    'reference sheet, C3 (10 % above the compensator)',
+    S.RELIEF_GAP,
     {
       equation: 'cracking = set/(1 + override)',
     },
@@ -41,7 +42,7 @@ export const reliefParameters: readonly ParameterSpec[] = [
     20 * BAR,
     [1 * BAR, 1000 * BAR],
     'Lower end of the adjustable range.',
-    PRACTICE,
+    S.PRACTICE,
   ),
   number(
     'detail',
@@ -51,7 +52,7 @@ export const reliefParameters: readonly ParameterSpec[] = [
     315 * BAR,
     [2 * BAR, 1000 * BAR],
     'Upper end of the adjustable range.',
-    PRACTICE,
+    S.PRACTICE,
   ),
   number(
     'detail',
@@ -61,7 +62,7 @@ export const reliefParameters: readonly ParameterSpec[] = [
     40 * BAR,
     [0.1 * BAR, 500 * BAR],
     'Change of the setting for one turn in.',
-    PRACTICE,
+    S.PRACTICE,
   ),
   number(
     'plate',
@@ -71,7 +72,7 @@ export const reliefParameters: readonly ParameterSpec[] = [
     40 * LITRE_PER_MINUTE,
     [0.1 * LITRE_PER_MINUTE, 5000 * LITRE_PER_MINUTE],
     'Flow through the valve at the set pressure: the pump’s full flow.',
-    'reference sheet, R5, R7',
+    S.RELIEF_SIZE,
     { equation: LIFT },
   ),
   number(
@@ -82,7 +83,7 @@ export const reliefParameters: readonly ParameterSpec[] = [
     0.08,
     [0.005, 1],
     '(set − cracking) ÷ cracking: direct-acting about 20 %, pilot-operated 5–8 %.',
-    'reference sheet, R1, R5',
+    S.RELIEF,
     {
       typical: [0.03, 0.5],
       equation: 'cracking = set/(1 + override)',
@@ -96,7 +97,7 @@ export const reliefParameters: readonly ParameterSpec[] = [
     0.9,
     [0.5, 1],
     'Pressure at which the valve has closed again ÷ cracking pressure.',
-    'reference sheet, R6 (amount: 80–95 %)',
+    S.RESEAT,
     {
       typical: [0.8, 0.95],
       equation: CLOSE,
@@ -110,7 +111,7 @@ export const reliefParameters: readonly ParameterSpec[] = [
     0.025,
     [1e-4, 1],
     'Time constant of the lift: direct-acting about 10 ms, pilot-operated about 25 ms.',
-    TYPICAL,
+    S.TYPICAL,
     {
       typical: [0.005, 0.1],
       equation: 'd(lift)/dt = (wanted lift − lift)/lag',
@@ -124,7 +125,7 @@ export const reliefParameters: readonly ParameterSpec[] = [
     null,
     [1 * BAR, 1000 * BAR],
     'Highest pressure the valve body is made for.',
-    PRACTICE,
+    S.PRACTICE,
     { ratingOf: 'P.pressure' },
   ),
   raw('crackingPressure', 'Cracking pressure (raw)', 'pressure', [1e4, 1e8], 'pCrack.'),

@@ -1,5 +1,6 @@
 import { pushedOut } from '../access.ts';
 import { defineKind } from '../kind.ts';
+import * as S from '../sources.ts';
 import { evaluateRelief, reliefCoefficients, reliefEntries, reliefFlow, reliefJacobian } from './kernel.ts';
 import { crackingPressure } from './laws.ts';
 import { reliefFaults, reliefInputs, reliefParameters, reliefScrews } from './parameters.ts';
@@ -60,7 +61,7 @@ export const reliefValve = defineKind({
     },
     {
       id: 'passing',
-      rises: 'relief passing',
+      rises: '',
       falls: 'relief closes',
       value: (block, i, w) => evaluateRelief(block, i, w).opening - PASSING,
     },
@@ -78,7 +79,7 @@ export const reliefValve = defineKind({
         inputs: ['setPressure', 'setFlow', 'lift', 'drop'],
         assumptions: ['Half lift at the set pressure, full lift at twice the override.'],
         limits: 'No flow forces.',
-        source: 'reference sheet, R1, R5; orifice equation O1–O6',
+        source: `${S.RELIEF}; ${S.ORIFICE}`,
       },
     },
     {
@@ -93,7 +94,7 @@ export const reliefValve = defineKind({
         inputs: ['setPressure', 'override', 'reseat', 'lag', 'drop'],
         assumptions: ['First order.'],
         limits: 'Chatter of a worn seat is not shown.',
-        source: 'reference sheet, R1, R5, R6',
+        source: `${S.RELIEF}; reseat: ${S.RESEAT}`,
       },
     },
     {
@@ -107,7 +108,7 @@ export const reliefValve = defineKind({
         inputs: ['P.pressure', 'T.pressure'],
         assumptions: [],
         limits: '',
-        source: 'definition',
+        source: S.DEFINITION,
       },
     },
     {
@@ -124,7 +125,7 @@ export const reliefValve = defineKind({
         inputs: ['flow', 'drop'],
         assumptions: [],
         limits: '',
-        source: 'reference sheet, R3, R7',
+        source: S.RELIEF_SIZE,
       },
     },
     {
@@ -138,7 +139,7 @@ export const reliefValve = defineKind({
         inputs: ['setPressure', 'override'],
         assumptions: [],
         limits: 'Pressure over the tank port.',
-        source: 'reference sheet, R1, R5',
+        source: S.RELIEF,
       },
     },
   ],
