@@ -1,5 +1,5 @@
 import type { InputSpec } from '../kinds/kind.ts';
-import type { DutyCommand, DutyComponent, DutyDocument, KindOf } from './duty.ts';
+import type { DutyComponent, DutyDocument, KindOf } from './duty.ts';
 
 /** A new flag that may be put on the tape: everything a command needs but its time. */
 export interface CommandOffer {
@@ -83,12 +83,4 @@ function offer(target: string, input: string, value: number, ramp: number, words
 
 function lower(words: string): string {
   return /^[A-Z][a-z]/.test(words) ? words.charAt(0).toLowerCase() + words.slice(1) : words;
-}
-
-/** A command id that no other command uses. */
-export function freeCommandId(commands: readonly Pick<DutyCommand, 'id'>[]): string {
-  const taken = new Set(commands.map((command) => command.id));
-  let n = commands.length + 1;
-  while (taken.has(`c${n}`)) n += 1;
-  return `c${n}`;
 }

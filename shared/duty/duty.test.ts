@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { type ComponentKind, defineKind } from '../kinds/kind.ts';
-import { freeCommandId, offeredCommands } from './command-offers.ts';
+import { offeredCommands } from './command-offers.ts';
 import { commandWords, shortWords } from './command-words.ts';
 import type { DutyCommand, DutyDocument } from './duty.ts';
 import { defaultLanes, fewerLanes } from './lanes.ts';
@@ -184,7 +184,6 @@ describe('offers', () => {
       ['Fault onset', ['M1: worn bearings']],
     ]);
   });
-  it('finds an id that is free', () => expect(freeCommandId([{ id: 'c2' }, { id: 'c3' }])).toBe('c4'));
 });
 
 describe('lanes', () => {

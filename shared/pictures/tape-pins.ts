@@ -1,6 +1,7 @@
 import type { VerdictId } from '../findings/finding.ts';
 import type { RunEvent, RunResult } from '../simulation/result.ts';
 import { type Box, freePlace, overlaps, textWidth } from './placement.ts';
+import type { TapeStall } from './tape-references.ts';
 
 /** What the run did, marked on the tape: one pin per event with words, in the ink of its case. */
 export interface Pin {
@@ -32,30 +33,52 @@ export interface PinnedCase {
   readonly letter: string;
   readonly ink: number;
   readonly run: RunResult;
+  /** Moment of the stall by the assessment [s]; a fall below pull-out speed at any other time is a dip or a stop. */
+  readonly stall?: Pick<TapeStall, 'motor' | 'time' | 'traceEnd' | 'resumes'> | null;
 }
 
-/** Which verdict's shape an event wears: by what the event says happened, not by its component's name. */
-export function pinVerdict(event: Pick<RunEvent, 'signal' | 'label' | 'rising'>): VerdictId | null {
+/** A stall is logged at the fall below pull-out speed; the assessment may date it a little later [s]. */
+const STALL_NEAR = 0.05;
+
+/** Signals that only repeat a command's flag, come with every start, or follow from another that is pinned. */
+const quiet = new Set(['switched-on', 'up-to-speed', 'open', 'bypass', 'passing']);
+/** What is true as the run begins did not happen in it [s]. */
+const BEGINNING = 0.002;
+
+/** Worth a place on the tape: what sets in, not what ends again. The table of events lists all. */
+function isPinned(event: RunEvent): boolean {
+  return event.label !== '' && event.rising && event.time > BEGINNING && !quiet.has(event.signal);
+}
+
+/** Which verdict's shape an event wears: by what it says happened. */
+export function pinVerdict(event: Pick<RunEvent, 'signal' | 'label'>, isStall: boolean): VerdictId | null {
+  if (isStall) return 'motor-stalls';
   const said = `${event.signal} ${event.label}`.toLowerCase();
-  if (/stall|pull-?out/.test(said)) return event.rising && /recover|above pull/.test(said) ? null : 'motor-stalls';
-  if (/\btrip/.test(said)) return 'trips';
+  if (/\btrips?\b/.test(said)) return 'trips';
   if (/relief|crack/.test(said)) return 'relief-passing';
   return null;
 }
 
-export function pinsOf(cases: readonly PinnedCase[], until: (caseId: string) => number): Pin[] {
+export function pinsOf(cases: readonly PinnedCase[]): Pin[] {
   const pins: Pin[] = [];
   for (const entry of cases) {
     for (const event of entry.run.events) {
-      if (event.label === '' || event.time > until(entry.id)) continue;
+      const { stall } = entry;
+      const isStall = !!stall && event.component === stall.motor && !event.rising && Math.abs(event.time - stall.time) < STALL_NEAR;
+      if (!isStall && !isPinned(event)) continue;
+      if (
+        event.time > (entry.stall?.traceEnd ?? Number.POSITIVE_INFINITY) &&
+        !(entry.stall?.resumes != null && event.time >= entry.stall.resumes)
+      )
+        continue;
       pins.push({
         caseId: entry.id,
         letter: entry.letter,
         ink: entry.ink,
         time: event.time,
-        words: event.label,
+        words: isStall ? 'stalls' : event.label,
         kind: `${event.component}.${event.signal}.${event.rising ? 'up' : 'down'}`,
-        verdict: pinVerdict(event),
+        verdict: pinVerdict(event, isStall),
       });
     }
   }

@@ -4,7 +4,7 @@ import type { Show } from '../duty/duty.ts';
 import type { Lane } from '../duty/lanes.ts';
 import type { Yardsticks } from '../findings/finding.ts';
 import type { LoadCurves } from '../findings/load-curves.ts';
-import { channelOf, type RunResult } from '../simulation/result.ts';
+import type { RunResult } from '../simulation/result.ts';
 
 /** A dotted line across a lane: a limit or a setting, in SI, with its words. */
 export interface LaneReference {
@@ -43,37 +43,40 @@ export interface TapeStall {
   readonly time: number;
   /** Current while stalled [A], null where unknown. */
   readonly current: number | null;
-  /** Traces end here in two dashes; the run's end where the motor comes back later. */
+  /** Traces end here in two dashes [s]. */
   readonly traceEnd: number;
+  /** The motor passes pull-out speed again here [s]: traces go on. Null = it stays stalled. */
+  readonly resumes: number | null;
 }
 
 /** Traces go on for this share of the duty after a stall, at least the given time [s], so that the fall is seen. */
 const AFTER_STALL = 0.12;
 const AFTER_STALL_LEAST = 0.6;
-/** A motor that reaches this share of its best speed again has come back. */
-const BACK = 0.5;
 
 export function tapeStall(run: RunResult, yardsticks: readonly Yardsticks[]): TapeStall | null {
   const yardstick = yardsticks.find((entry) => entry.stalled && entry.stallTime !== undefined);
   if (yardstick?.stallTime === undefined) return null;
-  const time = yardstick.stallTime;
+  const { motor, stallTime: time } = yardstick;
+  const back = run.events.find((event) => event.component === motor && event.signal === 'up-to-speed' && event.rising && event.time > time);
   const settled = time + Math.max(AFTER_STALL_LEAST, AFTER_STALL * run.duration);
-  const speed = channelOf(run, `${yardstick.motor}.speed`)?.values;
-  let best = 0;
-  let later = 0;
-  if (speed) {
-    for (let i = 0; i < run.times.length; i += 1) {
-      const at = run.times[i] as number;
-      const value = speed[i] as number;
-      if (at <= time) best = Math.max(best, value);
-      else if (at > time + AFTER_STALL_LEAST) later = Math.max(later, value);
-    }
-  }
-  const comesBack = best > 0 && later > BACK * best;
   return {
-    motor: yardstick.motor,
+    motor,
     time,
     current: yardstick.stallCurrent ?? null,
-    traceEnd: comesBack ? run.time : Math.min(run.time, settled),
+    traceEnd: Math.min(settled, back?.time ?? run.time, run.time),
+    resumes: back?.time ?? null,
   };
+}
+
+/** Stretches over which a trace is drawn [s]: up to the stall's end, and again from where the motor is back. The load is not
+ *  drawn below pull-out speed. */
+export function traceStretches(run: RunResult, stall: TapeStall | null, isLoad: boolean): (readonly [from: number, to: number])[] {
+  if (!stall) return [[0, run.time]];
+  const first = [0, isLoad ? stall.time : stall.traceEnd] as const;
+  return stall.resumes === null ? [first] : [first, [stall.resumes, run.time]];
+}
+
+/** True between a stall and the motor's return. */
+export function isStalledAt(stall: TapeStall | null, time: number): boolean {
+  return stall !== null && time >= stall.time && (stall.resumes === null || time < stall.resumes);
 }

@@ -1,8 +1,8 @@
 import { describe, expect, it } from 'vitest';
-import { syntheticRun } from '#tests/support/synthetic-tape.ts';
 import { casePen, tracePen } from './case-pens.ts';
 import { envelope, extent } from './envelope.ts';
 import { freePlace, overlaps, pushApart, stackFlags, textWidth } from './placement.ts';
+import { syntheticRun } from './run-for-tests.ts';
 import { laneDomain, linearScale, roundTicks, tickDigits } from './scale.ts';
 import { tapeBand } from './tape-band.ts';
 import { groupWords, joinNumerals, mergePins, type Pin, pinsOf, pinVerdict, placeMarks } from './tape-pins.ts';
@@ -118,19 +118,30 @@ describe('pins', () => {
       channels: [],
       events: [
         { signal: 'cracks', component: 'V2', time: 1, rising: true, label: 'relief cracks' },
-        { signal: 'cracks', component: 'V2', time: 2, rising: false, label: '' },
+        { signal: 'in', component: 'A1', time: 0, rising: true, label: 'rod fully in' },
+        { signal: 'passing', component: 'V2', time: 1.1, rising: true, label: 'relief passing' },
+        { signal: 'cracks', component: 'V2', time: 2, rising: false, label: 'relief shut' },
         { signal: 'cracks', component: 'V2', time: 5, rising: true, label: 'relief cracks' },
       ],
     });
-    const pins = pinsOf([{ id: 'A', letter: 'A', ink: 0, run }], () => 4);
+    const pins = pinsOf([{ id: 'A', letter: 'A', ink: 0, run, stall: { motor: 'M1', time: 3, traceEnd: 4, resumes: null } }]);
     expect(pins).toHaveLength(1);
     expect(pins[0]).toMatchObject({ time: 1, verdict: 'relief-passing' });
   });
   it('wear the shape of what they say', () => {
-    const event = (signal: string, label: string, rising = true) => pinVerdict({ signal, label, rising });
-    expect(event('past-pull-out', 'stalls')).toBe('motor-stalls');
-    expect(event('overload', 'overload trips')).toBe('trips');
-    expect(event('compensates', 'starts to compensate')).toBeNull();
+    expect(pinVerdict({ signal: 'overload-trip', label: 'overload relay trips' }, false)).toBe('trips');
+    expect(pinVerdict({ signal: 'compensating', label: 'starts to compensate' }, false)).toBeNull();
+  });
+  it('call a fall below pull-out speed a stall only where the assessment does', () => {
+    const fall = (time: number) => ({ signal: 'up-to-speed', component: 'M1', time, rising: false, label: 'falls below pull-out speed' });
+    const met = (time: number) => ({ signal: 'work-met', component: 'A1', time, rising: true, label: 'meets the work' });
+    const start = { signal: 'up-to-speed', component: 'M1', time: 0.2, rising: true, label: 'passes pull-out speed' };
+    const run = syntheticRun({ channels: [], events: [start, fall(2), { ...start, time: 5 }, fall(6), met(4), met(6.5)] });
+    const pins = pinsOf([{ id: 'A', letter: 'A', ink: 0, run, stall: { motor: 'M1', time: 2.01, traceEnd: 3, resumes: 5 } }]);
+    expect(pins.map((entry) => [entry.words, entry.verdict])).toEqual([
+      ['stalls', 'motor-stalls'],
+      ['meets the work', null],
+    ]);
   });
   it('carry the numeral of a finding of their case and moment', () => {
     const groups = mergePins([pin({ time: 2 }), pin({ time: 2.02, caseId: 'B', letter: 'B' })], x);

@@ -1,6 +1,6 @@
 import { useMemo } from 'react';
 import type { Yardsticks } from '#shared/findings/finding.ts';
-import { tapeStall } from '#shared/pictures/tape-references.ts';
+import { tapeStall, traceStretches } from '#shared/pictures/tape-references.ts';
 import type { RunResult } from '#shared/simulation/result.ts';
 import { Sparkline } from './sparkline.tsx';
 
@@ -24,22 +24,21 @@ export function LoadSparkline({ run, yardsticks, ink, dash, width, height, stale
     );
     const channel = load ?? run.channels.find((entry) => entry.address.endsWith('.outlet.pressure'));
     const stall = tapeStall(run, yardsticks);
-    const cut = stall !== null && stall.traceEnd < run.time;
-    return { channel, isLoad: load !== undefined, end: cut && stall ? stall.time : run.time, cut };
+    return { channel, isLoad: load !== undefined, stretches: traceStretches(run, stall, true), stalled: stall !== null };
   }, [run, yardsticks]);
   if (!found.channel) return null;
   return (
     <Sparkline
       times={run.times}
       values={found.channel.values}
-      end={found.end}
+      stretches={found.stretches}
       duration={run.duration}
       ink={ink}
       dash={dash}
       width={width}
       height={height}
       reference={found.isLoad ? 1 : undefined}
-      stalled={found.cut}
+      stalled={found.stalled}
       stale={stale}
     />
   );

@@ -6,8 +6,8 @@ import { valueAt } from '#shared/simulation/result.ts';
 export interface SparklineProps {
   readonly times: Float64Array;
   readonly values: Float64Array;
-  /** The line stops here [s]; without it at the run's end. */
-  readonly end?: number;
+  /** Stretches over which the line is drawn [s]; without them the whole run. */
+  readonly stretches?: readonly (readonly [from: number, to: number])[];
   /** Length of the time axis [s]. */
   readonly duration: number;
   /** Index of the case ink. */
@@ -20,7 +20,7 @@ export interface SparklineProps {
   readonly stretch?: boolean;
   /** Dotted line at this value, e.g. 1 for rated torque. */
   readonly reference?: number;
-  /** Mark at the end of a line that ends at a stall. */
+  /** Mark where the first stretch ends at a stall. */
   readonly stalled?: boolean;
   readonly stale?: boolean;
 }
@@ -30,22 +30,31 @@ export function Sparkline(props: SparklineProps) {
   const { times, values, duration, reference, stalled = false } = props;
   const width = props.width ?? (props.stretch ? 220 : 72);
   const height = props.height ?? 26;
-  const end = props.end ?? times[times.length - 1] ?? 0;
+  const stretches = props.stretches;
   const drawn = useMemo(() => {
-    const span = extent(times, values, 0, end);
-    if (!span) return null;
-    const low = Math.min(0, span[0]);
-    const high = Math.max(span[1], reference ?? span[1], low + 1e-12);
+    const drawnOver = stretches ?? [[0, times[times.length - 1] ?? 0] as const];
+    let low = 0;
+    let high = Math.max(reference ?? 0, 1e-12);
+    for (const [from, to] of drawnOver) {
+      const span = extent(times, values, from, to);
+      if (!span) continue;
+      low = Math.min(low, span[0]);
+      high = Math.max(high, span[1]);
+    }
     const room = stalled ? 7 : 2;
     const x = linearScale(0, duration || 1, 1, width - 1);
     const y = linearScale(low, high, height - 2, room);
-    const points = envelope(times, values, 0, end, Math.max(8, Math.round(width / 1.5)));
     let d = '';
-    for (let i = 0; i < points.length; i += 2) {
-      d += `${i === 0 ? 'M' : 'L'}${x(points[i] as number).toFixed(1)} ${y(points[i + 1] as number).toFixed(1)}`;
+    for (const [from, to] of drawnOver) {
+      const points = envelope(times, values, from, to, Math.max(8, Math.round(width / 1.5)));
+      for (let i = 0; i < points.length; i += 2) {
+        d += `${i === 0 ? 'M' : 'L'}${x(points[i] as number).toFixed(1)} ${y(points[i + 1] as number).toFixed(1)}`;
+      }
     }
+    const end = drawnOver[0]?.[1] ?? 0;
+    if (d === '') return null;
     return { d, x: x(end), y: y(valueAt(times, values, end)), reference: reference === undefined ? null : y(reference) };
-  }, [times, values, end, duration, reference, stalled, width, height]);
+  }, [times, values, stretches, duration, reference, stalled, width, height]);
   if (!drawn) return null;
   return (
     <svg

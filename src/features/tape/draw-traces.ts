@@ -58,10 +58,22 @@ export function laneScale(lane: TapeLane, top: number, height: number) {
   return scaleLinear([lane.low, lane.high], [top + height - PAD_BOTTOM, top + PAD_TOP]);
 }
 
-export function drawTraces(context: Context, model: TapeModel, geometry: TapeGeometry, tokens: Tokens): void {
+export interface Vertical {
+  readonly time: number;
+  readonly ink: number;
+}
+
+export function drawTraces(
+  context: Context,
+  model: TapeModel,
+  geometry: TapeGeometry,
+  tokens: Tokens,
+  verticals: readonly Vertical[] = [],
+): void {
   context.clearRect(0, 0, geometry.width, geometry.height);
   context.lineJoin = 'round';
   drawGrid(context, geometry, tokens);
+  drawVerticals(context, geometry, tokens, verticals);
   for (const place of geometry.lanes) {
     const lane = model.lanes[place.index];
     if (!lane) continue;
@@ -101,6 +113,21 @@ function drawGrid(context: Context, geometry: TapeGeometry, tokens: Tokens): voi
     context.lineTo(geometry.width, at);
   }
   context.stroke();
+  context.restore();
+}
+
+function drawVerticals(context: Context, geometry: TapeGeometry, tokens: Tokens, verticals: readonly Vertical[]): void {
+  const x = timeScale(geometry);
+  context.save();
+  context.lineWidth = 1.3;
+  context.setLineDash([1.5, 3]);
+  for (const vertical of verticals) {
+    context.strokeStyle = tokens.cases[vertical.ink] ?? tokens.ink;
+    context.beginPath();
+    context.moveTo(x(vertical.time), 0);
+    context.lineTo(x(vertical.time), geometry.height);
+    context.stroke();
+  }
   context.restore();
 }
 
@@ -153,28 +180,27 @@ function drawTrace(
   if (!entry) return;
   const x = timeScale(geometry);
   const y = laneScale(lane, place.top, place.height);
-  const points = envelope(
-    trace.times,
-    trace.values,
-    geometry.from,
-    Math.min(trace.end, geometry.to),
-    Math.max(1, Math.round(geometry.plotWidth)),
-  );
-  if (points.length < 2) return;
   context.save();
   context.globalAlpha = entry.stale ? 0.4 : 1;
   context.strokeStyle = tokens.cases[entry.ink] ?? tokens.ink;
   context.lineWidth = entry.pen.width;
   context.setLineDash([...entry.pen.dash]);
-  context.beginPath();
-  for (let i = 0; i < points.length; i += 2) {
-    const px = x(points[i] as number);
-    const py = y(points[i + 1] as number);
-    if (i === 0) context.moveTo(px, py);
-    else context.lineTo(px, py);
+  for (const [from, to] of trace.stretches) {
+    const start = Math.max(from, geometry.from);
+    const end = Math.min(to, geometry.to);
+    const columns = Math.max(1, Math.round(x(end) - x(start)));
+    const points = envelope(trace.times, trace.values, start, end, columns);
+    context.beginPath();
+    for (let i = 0; i < points.length; i += 2) {
+      const px = x(points[i] as number);
+      const py = y(points[i + 1] as number);
+      if (i === 0) context.moveTo(px, py);
+      else context.lineTo(px, py);
+    }
+    context.stroke();
   }
-  context.stroke();
-  if (trace.stalled) drawStallEnd(context, model, lane, trace, x(trace.end), y, tokens);
+  const fall = trace.stretches[0]?.[1];
+  if (trace.stalled && fall !== undefined) drawStallEnd(context, model, lane, trace, x(fall), y, tokens);
   context.restore();
 }
 
@@ -189,7 +215,7 @@ function drawStallEnd(
   tokens: Tokens,
 ): void {
   const entry = model.cases[trace.caseIndex];
-  const at = y(valueAt(trace.times, trace.values, trace.end));
+  const at = y(valueAt(trace.times, trace.values, trace.stretches[0]?.[1] ?? 0));
   context.setLineDash([]);
   if (lane.lane.role !== 'load') {
     context.beginPath();
@@ -227,7 +253,7 @@ function drawLetters(
   const x = timeScale(geometry);
   const y = laneScale(lane, place.top, place.height);
   const ends = lane.traces.map((trace) => {
-    const time = Math.min(trace.end, geometry.to);
+    const time = Math.min(trace.stretches[trace.stretches.length - 1]?.[1] ?? 0, geometry.to);
     return {
       trace,
       x: x(time),

@@ -1,3 +1,4 @@
+import { isStalledAt } from '#shared/pictures/tape-references.ts';
 import { channelOf, valueAt } from '#shared/simulation/result.ts';
 import type { UnitPreferences } from '#shared/units/convert.ts';
 import { formatQuantity } from '#shared/units/format.ts';
@@ -13,20 +14,11 @@ export function laneReading(entry: TapeCase, lane: TapeLane, time: number, prefe
   const { run, stall } = entry;
   const channel = run && channelOf(run, lane.lane.address);
   if (!run || !channel || run.times.length === 0) return { value: '–', unit: '' };
-  if (lane.lane.role === 'load' && stall && time >= stall.time && stillStalled(entry, time)) {
+  if (lane.lane.role === 'load' && stall && isStalledAt(stall, time)) {
     const current = channelOf(run, `${stall.motor}.current`);
     const amps = current ? valueAt(run.times, current.values, time) : stall.current;
     return { value: 'stalled', unit: amps === null ? '' : formatQuantity(amps, 'current', preferences, { digits: 0 }).text };
   }
   const formatted = formatQuantity(valueAt(run.times, channel.values, time), lane.lane.quantity, preferences);
   return { value: formatted.value, unit: lane.lane.role === 'load' ? '× rated' : formatted.unit };
-}
-
-function stillStalled(entry: TapeCase, time: number): boolean {
-  const { run, stall } = entry;
-  if (!run || !stall) return false;
-  if (stall.traceEnd < run.time) return true;
-  const speed = channelOf(run, `${stall.motor}.speed`);
-  if (!speed) return true;
-  return valueAt(run.times, speed.values, time) < valueAt(run.times, speed.values, stall.time);
 }

@@ -4,7 +4,7 @@ import type { Lane } from '#shared/duty/lanes.ts';
 import { type CasePen, tracePen } from '#shared/pictures/case-pens.ts';
 import { extent } from '#shared/pictures/envelope.ts';
 import { laneDomain } from '#shared/pictures/scale.ts';
-import { type LaneReference, laneReferences, type TapeStall, tapeStall } from '#shared/pictures/tape-references.ts';
+import { type LaneReference, laneReferences, type TapeStall, tapeStall, traceStretches } from '#shared/pictures/tape-references.ts';
 import { channelOf, type RunResult } from '#shared/simulation/result.ts';
 import { fromSi, preferredUnit, type UnitPreferences } from '#shared/units/convert.ts';
 import { formatQuantity } from '#shared/units/format.ts';
@@ -31,9 +31,9 @@ export interface TapeTrace {
   readonly caseIndex: number;
   readonly times: Float64Array;
   readonly values: Float64Array;
-  /** The trace is drawn up to here [s]. */
-  readonly end: number;
-  /** True when it ends at a stall: two dashes, in the load lane a bar and words. */
+  /** Stretches over which it is drawn [s]. */
+  readonly stretches: readonly (readonly [from: number, to: number])[];
+  /** True when the first stretch ends at a stall: two dashes, in the load lane a bar and words. */
   readonly stalled: boolean;
 }
 
@@ -119,19 +119,20 @@ function laneTrace(entry: TapeCase, caseIndex: number, lane: Lane): TapeTrace[] 
   const { run, stall } = entry;
   const channel = run && channelOf(run, lane.address);
   if (!run || !channel) return [];
-  const cut = stall !== null && stall.traceEnd < run.time;
-  const end = stall && lane.role === 'load' && cut ? stall.time : cut ? stall.traceEnd : run.time;
-  return [{ caseIndex, times: run.times, values: channel.values, end, stalled: cut }];
+  const stretches = traceStretches(run, stall, lane.role === 'load');
+  return [{ caseIndex, times: run.times, values: channel.values, stretches, stalled: stall !== null }];
 }
 
 function laneEnds(traces: readonly TapeTrace[], references: readonly LaneReference[], unit: Unit): readonly [number, number] {
   let low = Number.POSITIVE_INFINITY;
   let high = Number.NEGATIVE_INFINITY;
   for (const trace of traces) {
-    const span = extent(trace.times, trace.values, 0, trace.end);
-    if (!span) continue;
-    low = Math.min(low, span[0]);
-    high = Math.max(high, span[1]);
+    for (const [from, to] of trace.stretches) {
+      const span = extent(trace.times, trace.values, from, to);
+      if (!span) continue;
+      low = Math.min(low, span[0]);
+      high = Math.max(high, span[1]);
+    }
   }
   for (const reference of references) {
     low = Math.min(low, reference.value);

@@ -1,0 +1,207 @@
+import { useCallback, useMemo, useState } from 'react';
+import { addCommand, moveCommand, removeCommand } from '#shared/circuit/edit/duty.ts';
+import { commandWords, shortWords } from '#shared/duty/command-words.ts';
+import { kindOf } from '#shared/kinds/registry.ts';
+import { tapeBand } from '#shared/pictures/tape-band.ts';
+import { pinsOf } from '#shared/pictures/tape-pins.ts';
+import { useFormat } from '#src/components/use-format.ts';
+import { useSize } from '#src/lib/use-size.ts';
+import { useCursor } from '#src/stores/cursor-store.ts';
+import { useDocument } from '#src/stores/document-store.ts';
+import { timeScale } from './draw-traces.ts';
+import { EventTable } from './event-table.tsx';
+import { FlagEditor } from './flag-editor.tsx';
+import { useLaneChoice } from './lane-store.ts';
+import { RunControls } from './run-controls.tsx';
+import { TapeAxis } from './tape-axis.tsx';
+import { TapeFlags } from './tape-flags.tsx';
+import { TapeFoot, type TapeSheet } from './tape-foot.tsx';
+import { planTape, tapeMeasures } from './tape-layout.ts';
+import { TapeMarks } from './tape-marks.tsx';
+import { AddFlagMenu } from './tape-menus.tsx';
+import { showIn } from './tape-model.ts';
+import { TapePlot } from './tape-plot.tsx';
+import { usePlayback } from './use-playback.ts';
+import { useTape } from './use-tape.ts';
+import { useTapeKeys } from './use-tape-keys.ts';
+import './tape.css';
+
+/** A numbered finding as the tape shows it. */
+export interface TapeFinding {
+  readonly number: number;
+  readonly caseId: string;
+  /** [s]; findings without a moment have no place on the tape. */
+  readonly time?: number;
+  readonly words: string;
+}
+
+export interface TapePanelProps {
+  /** Room for lanes: 5 on a desk, 3 beside a rail, 1 on a phone. */
+  readonly lanes?: 5 | 3 | 1;
+  readonly findings?: readonly TapeFinding[];
+  /** A numeral on the tape was picked, or its digit pressed. */
+  readonly onFinding?: (number: number) => void;
+  /** False: flags can be read and opened by nobody (a locked lesson, a link). */
+  readonly canEdit?: boolean;
+}
+
+/** The chart-recorder band: commands as flags, what the runs did as pins, lanes of traces, and the cursor that sets the moment of
+ *  every reading on the screen. */
+export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true }: TapePanelProps) {
+  const document = useDocument((state) => state.document);
+  const edit = useDocument((state) => state.edit);
+  const model = useTape(lanes);
+  const format = useFormat();
+  const focusAddress = useLaneChoice((state) => state.focus);
+  const [sheet, setSheet] = useState<TapeSheet>(null);
+  const [editing, setEditing] = useState<string | null>(null);
+  const [plotRef, size] = useSize<HTMLDivElement>();
+  const measures = tapeMeasures(lanes);
+  const plan = useMemo(() => planTape(model, size, measures.right, focusAddress), [model, size, measures.right, focusAddress]);
+  const { geometry } = plan;
+
+  const pins = useMemo(
+    () =>
+      pinsOf(
+        model.cases.flatMap((entry) =>
+          entry.run
+            ? [
+                {
+                  id: entry.id,
+                  letter: entry.pen.letter,
+                  ink: entry.ink,
+                  run: entry.run,
+                  stall: entry.stall,
+                },
+              ]
+            : [],
+        ),
+      ),
+    [model.cases],
+  );
+  const numerals = useMemo(
+    () =>
+      findings.flatMap((finding) =>
+        finding.time !== undefined && model.cases.some((entry) => entry.id === finding.caseId)
+          ? [{ number: finding.number, caseId: finding.caseId, time: finding.time }]
+          : [],
+      ),
+    [findings, model.cases],
+  );
+  const show = useMemo(() => showIn(format.preferences), [format.preferences]);
+  const flags = useMemo(
+    () =>
+      document.duty.commands.map((command) => {
+        const words = commandWords(document, kindOf, command, show);
+        return { id: command.id, time: command.time, words, short: shortWords(words) };
+      }),
+    [document, show],
+  );
+  const x = useMemo(() => timeScale(geometry), [geometry]);
+  const band = useMemo(
+    () =>
+      tapeBand(flags, pins, numerals, {
+        x,
+        width: geometry.plotWidth,
+        size: 13,
+        rowHeight: measures.rowHeight,
+        short: measures.shortFlags,
+        bare: measures.bareMarks,
+      }),
+    [flags, pins, numerals, x, geometry.plotWidth, measures.rowHeight, measures.shortFlags, measures.bareMarks],
+  );
+  const verticals = useMemo(
+    () =>
+      band.marks.flatMap((mark) => {
+        const pin = mark.group?.pins.length === 1 ? mark.group.pins[0] : undefined;
+        return pin && (mark.words !== '' || pin.verdict || mark.numerals.length > 0) ? [{ time: pin.time, ink: pin.ink }] : [];
+      }),
+    [band.marks],
+  );
+  const moments = useMemo(
+    () =>
+      [...new Set([...flags.map((flag) => flag.time), ...pins.map((pin) => pin.time), ...numerals.map((entry) => entry.time)])].sort(
+        (a, b) => a - b,
+      ),
+    [flags, pins, numerals],
+  );
+  usePlayback({ duration: model.duration, repeat: document.duty.repeat, moments });
+  const seconds = useCallback((time: number) => format.quantity(time, 'time', { unit: 's', digits: 2 }).text, [format]);
+  const pick = useCallback((time: number) => useCursor.getState().setTime(time), []);
+  const handleKey = useTapeKeys({ duration: model.duration, moments, findings: numerals, onFinding });
+  const command = document.duty.commands.find((entry) => entry.id === editing);
+  const anyStale = model.cases.some((entry) => entry.stale);
+
+  return (
+    <section
+      className="tape"
+      aria-label="Tape"
+      data-lanes={lanes}
+      data-stale={anyStale || undefined}
+      style={
+        { '--tape-left': `${measures.left}px`, '--tape-band': `${Math.max(band.height, 2 * measures.rowHeight)}px` } as React.CSSProperties
+      }
+      onKeyDown={handleKey}
+    >
+      <RunControls compact={lanes === 1} duration={model.duration} />
+      <div className="tape-band">
+        <TapeMarks marks={band.marks} rowHeight={band.rowHeight} top={0} showTime={seconds} onPick={pick} onFinding={onFinding} />
+        <TapeFlags
+          flags={band.flags}
+          rowHeight={band.rowHeight}
+          height={band.height}
+          perPixel={geometry.plotWidth > 0 ? model.duration / geometry.plotWidth : 0}
+          canEdit={canEdit}
+          spoken={(flag) => `Command ${flag.words} at ${seconds(flag.time)}`}
+          onGrab={useDocument.getState().beginGesture}
+          onLetGo={useDocument.getState().endGesture}
+          onMove={(id, time) => edit((now) => moveCommand(now, id, time))}
+          onDelete={(id) => edit((now) => removeCommand(now, id))}
+          onOpen={(id) => canEdit && setEditing(id)}
+        />
+        {canEdit && (
+          <button
+            type="button"
+            className="tape-add"
+            aria-expanded={sheet === 'flag'}
+            aria-label="Add a flag"
+            title="Add a flag at the cursor"
+            onClick={() => setSheet(sheet === 'flag' ? null : 'flag')}
+          >
+            <span aria-hidden="true">+</span>
+          </button>
+        )}
+      </div>
+      <TapePlot ref={plotRef} model={model} plan={plan} verticals={verticals} hidden={sheet === 'table'} />
+      <TapeAxis model={model} geometry={geometry} />
+      <TapeFoot document={document} model={model} sheet={sheet} onSheet={setSheet} room={lanes} />
+      <EventTable document={document} model={model} findings={findings} visible={sheet === 'table'} />
+      {sheet === 'flag' && (
+        <section className="tape-sheet tape-sheet-right" aria-label="Add a flag">
+          <AddFlagMenu
+            document={document}
+            onAdd={(offer) => {
+              const time = Math.min(useCursor.getState().time, document.duty.duration);
+              const added = addCommand(document, { ...offer, time: Math.round(time * 100) / 100, label: '' });
+              if (added.id) {
+                edit((now) => addCommand(now, { ...offer, time: Math.round(time * 100) / 100, label: '' }).document);
+                setEditing(added.id);
+              }
+              setSheet(null);
+            }}
+          />
+        </section>
+      )}
+      {command && (
+        <FlagEditor
+          key={command.id}
+          document={document}
+          command={command}
+          left={Math.min(Math.max(measures.left + x(command.time) - 20, 4), Math.max(4, size.width + measures.left - 330))}
+          onEdit={edit}
+          onClose={() => setEditing(null)}
+        />
+      )}
+    </section>
+  );
+}
