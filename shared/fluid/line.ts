@@ -32,11 +32,6 @@ export function lineLoss(length: number, bore: number, density: number, viscosit
   };
 }
 
-/** Reynolds number of a mean velocity [m/s] in a bore [m] at a kinematic viscosity [m²/s]. */
-export function reynolds(velocity: number, bore: number, kinematic: number): number {
-  return (velocity * bore) / kinematic;
-}
-
 /** Compliance 1/Bc [1/Pa] of a thick steel tube: (2/E)·((do² + d²)/(do² − d²) + ν). bore, wall [m]. Reference sheet B10. */
 export function tubeCompliance(bore: number, wall: number): number {
   const outer = bore + 2 * wall;

@@ -19,6 +19,7 @@ import {
   fillingSpan,
   idealFlow,
   idealTorque,
+  kneePressure,
   NO_FILLING,
   STROKE_ROUNDING,
 } from './laws.ts';
@@ -211,7 +212,7 @@ function evaluateStroke(block: Block, i: number, w: Workspace, stroke: number, p
   const rateByError = speed + error * speedSlope;
   point.rateByStroke = -rateByError;
   point.rateByPressure = (-rateByError * free * commandSlope) / band;
-  point.knee = setting - band * most;
+  point.knee = kneePressure(setting, band, most);
 }
 
 /** Adds flows, torque and the stroke's derivative. */

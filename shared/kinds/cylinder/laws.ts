@@ -23,11 +23,6 @@ export function hydraulicForce(cap: number, rodSide: number, areaA: number, area
   return cap * areaA - rodSide * areaB;
 }
 
-/** Pressure on a blocked rod side [Pa] when the cap side is under pressure and nothing pushes back: p·AA/AB. */
-export function blockedRodPressure(cap: number, areaA: number, areaB: number): number {
-  return (cap * areaA) / areaB;
-}
-
 /** Friction against the motion [N]: (Fc + (Fs − Fc)/(1 + (v/vs)²))·sign(v/vt) + b·v. */
 export function friction(v: number, coulomb: number, stiction: number, viscous: number): number {
   const r = v / STRIBECK_SPEED;

@@ -2,7 +2,7 @@ import { smoothSign, smoothSignSlope, smoothStep, smoothStepSlope } from '../../
 import { indices } from '../build.ts';
 import type { Block, Plate, RunConstants, Workspace } from '../kind.ts';
 import { Memo } from '../memo.ts';
-import { classTimeConstant, designMinima, pullOutSlip, relayFactor, synchronousSpeed } from './laws.ts';
+import { classTimeConstant, designMinima, klossRatio, pullOutSlip, relayFactor, singlePhaseRatio, synchronousSpeed } from './laws.ts';
 
 /** Torque and current of the motor at one shaft speed, with their derivatives.
  *  σ = (ws − w)/ws0 is slip speed over the synchronous speed at rated frequency; flux = (V/Vn)·(fn/f). Then torque =
@@ -144,7 +144,7 @@ function torqueCurve(c: Float64Array, b: number, s: number): void {
   const sk = c[b + C.pullOutSlip]!;
   if (s <= sk || c[b + C.klossAlone]! !== 0) {
     const square = s * s + sk * sk;
-    torqueAt.value = (2 * tb * s * sk) / square;
+    torqueAt.value = tb * klossRatio(s, sk);
     torqueAt.slope = (2 * tb * sk * (sk * sk - s * s)) / (square * square);
     return;
   }
@@ -228,7 +228,7 @@ export function evaluateMotor(block: Block, i: number, w: Workspace): MotorPoint
     const dq = 2 - 2 * slip;
     const bottom = sk * sk + q * q;
     const tb = c[b + C.pullOutTorque]!;
-    const single = (tb * sk * (1 - slip) * q) / bottom;
+    const single = tb * singlePhaseRatio(slip, sk);
     const singleSlope = (tb * sk * (-q + (1 - slip) * dq - ((1 - slip) * q * 2 * q * dq) / bottom)) / bottom;
     curve = torque + lost * (single - torque);
     curveSlope = torqueSlope + lost * (singleSlope / faster - torqueSlope);

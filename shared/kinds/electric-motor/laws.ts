@@ -1,4 +1,4 @@
-import { exponential, naturalLog } from '../../fluid/elementary.ts';
+import { naturalLog } from '../../fluid/elementary.ts';
 
 /** Laws of the induction motor and its overload relay as plain functions; `prepare` and the checks call them. */
 
@@ -85,12 +85,6 @@ export function tripTime(multiple: number, k: number, timeConstant: number, star
   if (startHeat >= 1) return 0;
   if (target <= 1) return Number.POSITIVE_INFINITY;
   return timeConstant * naturalLog((target - startHeat) / (target - 1));
-}
-
-/** Heat after a mean square current (times the dial squared) has run for a time from heat θ0. */
-export function heatAfter(meanSquare: number, k: number, timeConstant: number, startHeat: number, time: number): number {
-  const target = meanSquare / (k * k);
-  return target + (startHeat - target) * exponential(-Math.min(600, time / timeConstant));
 }
 
 /** Single-phase torque ÷ pull-out torque at full voltage, for slip s and pull-out slip sk:

@@ -12,11 +12,6 @@ export function crackingPressure(set: number, override: number): number {
   return set / (1 + override);
 }
 
-/** Override from full-flow (set) and cracking pressure. */
-export function overrideOf(set: number, cracking: number): number {
-  return (set - cracking) / cracking;
-}
-
 /** Flow coefficient at full lift, so that half lift at the set pressure passes the set flow. */
 export function reliefCoefficient(setFlow: number, set: number): number {
   return (2 * setFlow) / orifice(1, set, LAMINAR);
