@@ -1,4 +1,5 @@
 import type { Component } from '../circuit/schema.ts';
+import { crackingPressure } from '../kinds/relief-valve/laws.ts';
 import type { Base, DriveLoad, FindingContext } from './context.ts';
 import { reliefsOf } from './context.ts';
 import type { Finding, Phrase, Seek } from './finding.ts';
@@ -62,8 +63,9 @@ export function compensatorUp(context: FindingContext, pump: string, words: Phra
   };
 }
 
-/** Cracking pressure of a relief as its plate says [Pa]: set pressure ÷ (1 + override), or the raw value. */
+/** Cracking pressure of a relief as its plate says [Pa]: set pressure ÷ (1 + override), or the raw value; a weak spring halves it. */
 export function cracking(base: Base, relief: string): number {
   const plate = base.plate(relief);
-  return plate.given('raw.crackingPressure') ?? plate.number('setPressure') / (1 + plate.number('override'));
+  const weaker = 1 - 0.5 * (plate.given('fault.weak-spring') ?? 0);
+  return weaker * (plate.given('raw.crackingPressure') ?? crackingPressure(plate.number('setPressure'), plate.number('override')));
 }
