@@ -19,7 +19,9 @@ export class CircuitSystem implements OdeSystem {
   readonly reading: Workspace & { pass: number };
   private readonly w: Mutable<Workspace> & { pass: number };
   private readonly oil: OilModel;
-  private readonly kinds: readonly ComponentKind[];
+  /** Kernels beside their blocks: called from here they need no look-up in objects of many shapes. */
+  private readonly flows: ComponentKind['flow'][];
+  private readonly jacobians: ComponentKind['jacobian'][];
   private readonly blocks: readonly Block[];
   private readonly readingBlocks: readonly Block[];
   private readonly profiles: Profile[];
@@ -41,7 +43,8 @@ export class CircuitSystem implements OdeSystem {
     this.profiles = [...circuit.profiles];
     const vector = (): Float64Array => new Float64Array(this.length);
     const working = circuit.blocks.filter(({ kind }) => kind.entries.length > 0 || kind.states.length > 0);
-    this.kinds = working.map(({ kind }) => kind);
+    this.flows = working.map(({ kind }) => kind.flow);
+    this.jacobians = working.map(({ kind }) => kind.jacobian);
     this.blocks = working.map(({ block }) => block);
     this.readingBlocks = working.map(({ reading }) => reading);
     this.w = { y: vector(), dy: vector(), balance: vector(), volume: vector(), u: this.u, jac: new Float64Array(0), pass: 0 };
@@ -99,15 +102,18 @@ export class CircuitSystem implements OdeSystem {
   }
 
   derivative(t: number, y: Float64Array, dy: Float64Array): void {
-    const { circuit, w, kinds, blocks, oil, capacity } = this;
+    const { circuit, w, flows, blocks, oil, capacity, length } = this;
     if (this.ramping) this.setTime(t);
     w.y = y;
     w.dy = dy;
     w.pass++;
     const { balance, volume } = w;
-    balance.fill(0);
-    volume.set(circuit.volume);
-    for (let k = 0; k < kinds.length; k++) kinds[k]!.flow(blocks[k]!, w);
+    const fixed = circuit.volume;
+    for (let i = 0; i < length; i++) {
+      balance[i] = 0;
+      volume[i] = fixed[i]!;
+    }
+    for (let k = 0; k < flows.length; k++) flows[k]!(blocks[k]!, w);
     const { nodes, compliance } = circuit;
     for (let i = 0; i < nodes; i++) {
       const c = volume[i]! / effectiveModulus(y[i]!, oil) + compliance[i]!;
@@ -120,12 +126,12 @@ export class CircuitSystem implements OdeSystem {
   }
 
   jacobian(_t: number, y: Float64Array, values: Float64Array): void {
-    const { circuit, w, kinds, blocks, oil, capacity, rowScale } = this;
+    const { circuit, w, jacobians, blocks, oil, capacity, rowScale } = this;
     const { nodes, compliance, pattern } = circuit;
     const { balance, volume } = w;
     w.y = y;
     w.jac = values;
-    values.fill(0);
+    for (let s = 0; s < values.length; s++) values[s] = 0;
     for (let i = 0; i < nodes; i++) rowScale[i] = 1 / capacity[i]!;
     for (let i = 0; i < nodes; i++) {
       const modulus = effectiveModulus(y[i]!, oil);
@@ -135,20 +141,20 @@ export class CircuitSystem implements OdeSystem {
       // Kernels scale by 1/volume; with yielding walls the share of the moving volume is smaller.
       if (compliance[i]! > 0) volume[i]! += modulus * compliance[i]!;
     }
-    for (let k = 0; k < kinds.length; k++) kinds[k]!.jacobian(blocks[k]!, w);
+    for (let k = 0; k < jacobians.length; k++) jacobians[k]!(blocks[k]!, w);
     const { rows } = pattern;
     for (let s = 0; s < rows.length; s++) values[s]! *= rowScale[rows[s]!]!;
   }
 
   /** Flow pass with a slot per port at (t, y): afterwards `reading` holds what readings, signals and powers need. */
   read(t: number, y: Float64Array): void {
-    const { circuit, reading, kinds, readingBlocks } = this;
+    const { circuit, reading, flows, readingBlocks } = this;
     if (this.ramping) this.setTime(t);
     reading.y.set(y);
     reading.pass++;
     reading.balance.fill(0);
     reading.volume.set(circuit.volume);
-    for (let k = 0; k < kinds.length; k++) kinds[k]!.flow(readingBlocks[k]!, reading);
+    for (let k = 0; k < flows.length; k++) flows[k]!(readingBlocks[k]!, reading);
   }
 
   /** Oil volume taken up by a node per pascal [m³/Pa], after `read`. */
