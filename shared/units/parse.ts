@@ -37,6 +37,8 @@ export interface ParseLimits {
   readonly max: number;
   /** Name of the field in the message. */
   readonly label?: string;
+  /** The bounds are the ends of an adjusting screw, and the sentence says so. */
+  readonly screw?: boolean;
   readonly preferences?: UnitPreferences;
 }
 
@@ -148,7 +150,7 @@ function withinLimits(parsed: ParsedQuantity, quantity: QuantityId, unit: Unit, 
   return {
     ok: false,
     reason: 'out-of-range',
-    message: `${limits.label ?? quantityOf(quantity).label} lies between ${show(limits.min)} and ${show(limits.max)}; ${parsed.typed} cannot be set.`,
+    message: `${limits.screw ? 'The screw turns' : `${limits.label ?? quantityOf(quantity).label} lies`} between ${show(limits.min)} and ${show(limits.max)}; ${parsed.typed} cannot be set.`,
     nearest: {
       label: show(bound),
       value: bound,

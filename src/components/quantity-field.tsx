@@ -1,8 +1,15 @@
-import { type ReactNode, useEffect, useId, useRef, useState } from 'react';
+import { useEffect, useId, useRef, useState } from 'react';
 import { preferredUnit, unitById } from '#shared/units/convert.ts';
 import { type ParseLimits, parseQuantity, type RefusedQuantity } from '#shared/units/parse.ts';
 import type { QuantityId } from '#shared/units/quantities.ts';
+import { CautionIcon } from './icons.tsx';
 import { useFormat } from './use-format.ts';
+
+export interface FieldRefusal {
+  readonly message: string;
+  /** Nearest value that would be taken [SI]. */
+  readonly nearest?: number;
+}
 
 export interface QuantityFieldProps {
   readonly label: string;
@@ -15,17 +22,11 @@ export interface QuantityFieldProps {
   readonly limits?: ParseLimits;
   /** Shown when there is no value. */
   readonly placeholder?: string;
-  readonly onCommit: (value: number, typed: string) => void;
+  /** Takes the value, or says why not and what would be taken. */
+  readonly onCommit: (value: number, typed: string) => FieldRefusal | undefined;
   /** Called when the field is emptied; without it an empty field is refused. */
   readonly onClear?: () => void;
   readonly describedBy?: string;
-  /** Row below the field when an entry was refused; the default shows the words and the choices. */
-  readonly renderRefusal?: (
-    refusal: RefusedQuantity,
-    entry: string,
-    use: (value: number, typed: string) => void,
-    keep: () => void,
-  ) => ReactNode;
 }
 
 /** A number field that takes any unit of its quantity. Enter or leaving commits; Escape gives the former value back. */
@@ -44,9 +45,17 @@ export function QuantityField(props: QuantityFieldProps) {
   }, [settled]);
 
   function accept(next: number, text: string) {
-    setRefusal(null);
     setEntry(text);
-    onCommit(next, text);
+    const refused = onCommit(next, text);
+    if (!refused) return setRefusal(null);
+    const { message, nearest } = refused;
+    const words = nearest === undefined ? '' : format.quantity(nearest, quantity, { style: 'plate' }).text;
+    setRefusal({
+      ok: false,
+      reason: 'out-of-range',
+      message: `${label} ${message}; ${text} cannot be set.`,
+      nearest: nearest === undefined ? undefined : { label: words, value: nearest, typed: words },
+    });
   }
   function keep() {
     setEntry(settled);
@@ -101,11 +110,7 @@ export function QuantityField(props: QuantityFieldProps) {
       />
       {refusal && (
         <div id={refusalId} role="alert" className="field-refusal">
-          {props.renderRefusal ? (
-            props.renderRefusal(refusal, entry, accept, keep)
-          ) : (
-            <Refusal refusal={refusal} settled={settled} use={accept} keep={keep} />
-          )}
+          <Refusal refusal={refusal} settled={settled} use={accept} keep={keep} />
         </div>
       )}
     </div>
@@ -131,6 +136,7 @@ export function Refusal({ refusal, settled, use, keep }: RefusalProps) {
   const choices = refusal.readings ?? (refusal.nearest ? [refusal.nearest] : []);
   return (
     <>
+      <CautionIcon size={17} />
       <span className="refusal-words">{refusal.message}</span>
       <span className="refusal-choices">
         {choices.map((choice) => (
