@@ -22,6 +22,7 @@ function integratorOf(problem: Problem, options: Partial<SolverOptions> = {}) {
   const system: OdeSystem = {
     size,
     length: size,
+    counted: size,
     nominal: Float64Array.from(problem.nominal ?? new Array(size).fill(1)),
     ramping: problem.ramping ?? false,
     derivative(t, y, dy) {

@@ -170,7 +170,7 @@ export class Rosenbrock implements Integrator {
     const ratio = this.lastStep > 0 ? h / this.lastStep : 0;
     this.h = h * factorAfterSuccess(error, ratio, this.lastError, rejectedBefore);
     this.lastStep = h;
-    this.lastError = Math.max(error, 0.01);
+    this.lastError = error;
     this.from = t;
     this.to = last ? this.end : t + h;
     this.finish();
@@ -252,7 +252,7 @@ export class Rosenbrock implements Integrator {
       const e = u6[i]! / scale;
       sum += e * e;
     }
-    return Math.sqrt(sum / system.size);
+    return Math.sqrt(sum / system.counted);
   }
 
   /** State with the largest share of the error norm, or the first that is not finite. */

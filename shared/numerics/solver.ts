@@ -9,6 +9,9 @@ export interface OdeSystem {
   readonly length: number;
   /** Absolute scale of each state: absolute tolerance = rtol × nominal. */
   readonly nominal: Float64Array;
+  /** Number of states over which the root mean square of the error is taken: those on which others depend, so that states that
+   *  only watch (a gauge's needle, a relay's heat) do not loosen the tolerance of the rest. */
+  readonly counted: number;
   /** True while f depends on time explicitly in the present segment. */
   readonly ramping: boolean;
   /** Writes the first `size` entries of dy. */

@@ -27,7 +27,9 @@ export class StepRecorder {
   }
 
   private row(time: number): void {
-    this.reader.write(this.rows.data, this.rows.add(time));
+    // Adding may move the table, so the place comes first.
+    const at = this.rows.add(time);
+    this.reader.write(this.rows.data, at);
   }
 
   /** State at the start of a segment: a row where the run starts or an input jumped. */

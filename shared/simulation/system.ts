@@ -4,6 +4,15 @@ import type { Block, ComponentKind, Workspace } from '../kinds/kind.ts';
 import type { OdeSystem } from '../numerics/solver.ts';
 import type { CompiledCircuit } from './circuit.ts';
 
+/** States on which another state depends; at least 1. */
+function statesThatMatter({ size, pattern }: CompiledCircuit): number {
+  const columns = new Set<number>();
+  pattern.columns.forEach((column, s) => {
+    if (pattern.rows[s] !== column) columns.add(column);
+  });
+  return size === 0 ? 1 : Math.max(1, columns.size);
+}
+
 type Mutable<T> = { -readonly [K in keyof T]: T[K] };
 
 /** Right-hand side and Jacobian of a compiled circuit, with the inputs of the present segment of the duty. One per run. */
@@ -11,6 +20,7 @@ export class CircuitSystem implements OdeSystem {
   readonly size: number;
   readonly length: number;
   readonly nominal: Float64Array;
+  readonly counted: number;
   ramping = false;
   readonly circuit: CompiledCircuit;
   /** Present value of every input. */
@@ -38,6 +48,7 @@ export class CircuitSystem implements OdeSystem {
     this.size = circuit.size;
     this.length = circuit.size + 1;
     this.nominal = circuit.nominal;
+    this.counted = statesThatMatter(circuit);
     this.oil = circuit.oil;
     this.u = new Float64Array(circuit.profiles.length);
     this.profiles = [...circuit.profiles];
