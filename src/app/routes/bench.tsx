@@ -1,11 +1,15 @@
-import { type ReactNode, useState } from 'react';
+import { type ReactNode, useMemo, useState } from 'react';
 import { CautionLine } from '#src/components/caution-line.tsx';
 import { ErrorRegion } from '#src/components/error-region.tsx';
+import { useFormat } from '#src/components/use-format.ts';
 import { CaseRow } from '#src/features/cases/case-row.tsx';
 import { FindingsPanel } from '#src/features/findings/findings-panel.tsx';
+import { showMoment } from '#src/features/findings/show-moment.ts';
+import { NameplateLayer } from '#src/features/nameplate/nameplate-layer.tsx';
+import { TapePanel } from '#src/features/tape/tape-panel.tsx';
 import { useLayout } from '#src/lib/layout.ts';
 import { useDocument } from '#src/stores/document-store.ts';
-import { useNumberedFindings } from '#src/stores/findings-numbering.ts';
+import { type NumberedFinding, useNumberedFindings } from '#src/stores/findings-numbering.ts';
 import { BottomBar, type PhoneView } from '../bottom-bar.tsx';
 import { NoticeStrip } from '../notice-strip.tsx';
 import { TopLine } from '../top-line.tsx';
@@ -18,7 +22,7 @@ export function BenchRoute() {
     <div className={`screen screen-${layout}`}>
       <TopLine screen="bench" />
       <div className="under-top">
-        <CaseRow form={phone ? 'phone' : 'cards'} sparkline={() => null} />
+        <CaseRow form={phone ? 'phone' : 'cards'} />
         <NoticeStrip />
       </div>
       {layout === 'desk' && <WideBench form="list" layout="desk" />}
@@ -27,6 +31,28 @@ export function BenchRoute() {
       {phone && <PhoneBench />}
     </div>
   );
+}
+
+/** The tape with the numerals of the findings. */
+function Tape({ lanes }: { readonly lanes: 5 | 3 | 1 }) {
+  const numbered = useNumberedFindings();
+  const format = useFormat();
+  const findings = useMemo(
+    () =>
+      numbered.map(({ number, finding }) => ({
+        number,
+        caseId: finding.caseId,
+        time: finding.time,
+        words: format.phrase(finding.headline),
+      })),
+    [numbered, format],
+  );
+  return <TapePanel lanes={lanes} findings={findings} onFinding={(number) => showFinding(numbered, number)} />;
+}
+
+function showFinding(numbered: readonly NumberedFinding[], number: number) {
+  const entry = numbered.find((candidate) => candidate.number === number);
+  if (entry) showMoment(entry.finding);
 }
 
 function Region({ name, title, children }: { readonly name: string; readonly title: string; readonly children: ReactNode }) {
@@ -44,13 +70,13 @@ function WideBench({ form, layout }: { readonly form: 'list' | 'rail'; readonly 
   return (
     <main className={`bench bench-${layout}`}>
       <Region name="drawing" title="The drawing">
-        {null}
+        <NameplateLayer />
       </Region>
       <Region name="findings" title="Findings">
         <FindingsPanel form={form} />
       </Region>
       <Region name="tape" title="The tape">
-        {null}
+        <Tape lanes={layout === 'desk' ? 5 : 3} />
       </Region>
       <Region name="load" title="The load picture">
         {null}
@@ -68,7 +94,7 @@ function NarrowBench() {
   return (
     <main className="bench bench-narrow">
       <Region name="drawing" title="The drawing">
-        {null}
+        <NameplateLayer />
       </Region>
       <div className="region-rail">
         <div className="rail-tabs" role="tablist" aria-label="Beside the drawing">
@@ -90,7 +116,7 @@ function NarrowBench() {
         )}
       </div>
       <Region name="tape" title="The tape">
-        {null}
+        <Tape lanes={3} />
       </Region>
       <div className="region-caution">
         <CautionLine form="half" />
@@ -107,12 +133,12 @@ function PhoneBench() {
       <div className={`phone-view phone-view-${view}`}>
         {view === 'drawing' && (
           <Region name="drawing" title="The drawing">
-            {null}
+            <NameplateLayer />
           </Region>
         )}
         {(view === 'tape' || view === 'drawing') && (
           <Region name="tape" title="The tape">
-            {null}
+            <Tape lanes={view === 'tape' ? 5 : 1} />
           </Region>
         )}
         {view === 'load' && (

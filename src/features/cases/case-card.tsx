@@ -1,7 +1,8 @@
-import { type CSSProperties, type ReactNode, useState } from 'react';
+import { type CSSProperties, useState } from 'react';
 import { caseLetter, renameCase } from '#shared/circuit/edit/cases.ts';
 import type { CircuitCase } from '#shared/circuit/schema.ts';
 import { CaseDash, CaseLetter } from '#src/components/case-letter.tsx';
+import { LoadSparkline } from '#src/components/charts/load-sparkline.tsx';
 import { LazyMenu } from '#src/components/lazy-menu.tsx';
 import { MiddleEllipsis } from '#src/components/middle-ellipsis.tsx';
 import { VerdictChip } from '#src/components/verdict.tsx';
@@ -15,11 +16,10 @@ export interface CaseCardProps {
   readonly form: 'cards' | 'phone';
   /** How many cases are on the screen: with three or more the trace's dash stands instead of the sparkline. */
   readonly shown: number;
-  readonly sparkline: (caseId: string) => ReactNode;
 }
 
 /** One case: pen square, name, where it is shown, its motor load in small, its verdict. Pressing it puts it on the drawing. */
-export function CaseCard({ entry, place, form, shown, sparkline }: CaseCardProps) {
+export function CaseCard({ entry, place, form, shown }: CaseCardProps) {
   const run = useRuns((state) => state.byCase[entry.id]);
   const [renaming, setRenaming] = useState(false);
   const letter = caseLetter(entry);
@@ -88,7 +88,15 @@ export function CaseCard({ entry, place, form, shown, sparkline }: CaseCardProps
       </div>
       {form === 'cards' && (
         <div className="case-foot">
-          {shown >= 3 ? <CaseDash ink={entry.ink} /> : <span className="case-sparkline">{sparkline(entry.id)}</span>}
+          {shown >= 3 ? (
+            <CaseDash ink={entry.ink} />
+          ) : (
+            <span className="case-sparkline">
+              {run?.run && run.assessment && (
+                <LoadSparkline run={run.run} yardsticks={run.assessment.yardsticks} ink={entry.ink} stale={run.stale} />
+              )}
+            </span>
+          )}
           {chip}
         </div>
       )}

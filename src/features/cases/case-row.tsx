@@ -1,4 +1,3 @@
-import type { ReactNode } from 'react';
 import { addCase, caseLetter } from '#shared/circuit/edit/cases.ts';
 import { Icon } from '#src/components/icons.tsx';
 import { takeCase } from '#src/stores/apply-value.ts';
@@ -7,12 +6,10 @@ import { CaseCard } from './case-card.tsx';
 
 export interface CaseRowProps {
   readonly form: 'cards' | 'phone';
-  /** Sparkline of a case's motor load, drawn by the tape. */
-  readonly sparkline: (caseId: string) => ReactNode;
 }
 
 /** Cards of all cases in their order; A is always as found. The last card makes a new case from the one on the drawing. */
-export function CaseRow({ form, sparkline }: CaseRowProps) {
+export function CaseRow({ form }: CaseRowProps) {
   const cases = useDocument((state) => state.document.cases);
   const activeCase = useDocument((state) => state.activeCase);
   const overlays = useDocument((state) => state.overlays);
@@ -27,7 +24,6 @@ export function CaseRow({ form, sparkline }: CaseRowProps) {
           place={entry.id === activeCase ? 'drawing' : overlays.includes(entry.id) ? 'overlaid' : 'aside'}
           form={form}
           shown={overlays.length + 1}
-          sparkline={sparkline}
         />
       ))}
       {active && (
