@@ -53,6 +53,7 @@ export const defaultSolverOptions: SolverOptions = {
   tolerance: 1e-4,
   firstStep: 1e-4,
   stepCap: 200_000,
+  relativeLimit: 30,
 };
 
 export type StepOutcome = 'accepted' | 'end' | 'failed';
