@@ -170,7 +170,7 @@ export function evaluatePump(block: Block, i: number, w: Workspace): PumpPoint {
   point.torqueByStroke = coupled * displacement * difference * fill;
   point.torqueBySpeed =
     coupled * coupled * (viscous + (dry * smoothSignSlope(speed / FRICTION_SPEED)) / FRICTION_SPEED + turning * fillBySpeed);
-  point.torqueByDifference = coupled * (stroke * displacement * fill + share * displacement * sign);
+  point.torqueByDifference = coupled * (stroke * displacement * fill + (difference < 0 ? -share : share) * displacement * sign);
   point.torqueByInlet = coupled * turning * fillByInlet;
 
   evaluateStroke(block, i, w, stroke, outlet - drain);

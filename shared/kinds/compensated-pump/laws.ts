@@ -53,7 +53,7 @@ export function frictionFromEfficiency(displacement: number, efficiency: number)
 
 /** Friction torque against rotation without its sign [N·m], pressure and constant part. */
 export function dryFriction(coulomb: number, pressureShare: number, displacement: number, difference: number): number {
-  return coulomb + pressureShare * displacement * difference;
+  return coulomb + pressureShare * displacement * Math.abs(difference);
 }
 
 /** Filling 0 … 1 at an inlet pressure [Pa abs]; both limits go with the square of speed. */

@@ -6,7 +6,7 @@ import * as S from '../sources.ts';
 
 const COMMAND = 'stroke command = (setting − (p outlet − p case drain))/band, held between the minimum and maximum stops';
 const STROKE_LAG = 'dα/dt = (command − α)/lag';
-const LOSS = 'friction torque = cV·w + (Tc0 + kTp·D·Δp)·sign(w); the plate efficiency is shared 40 : 15 : 45 between the three';
+const LOSS = 'friction torque = cV·w + (Tc0 + kTp·D·|Δp|)·sign(w); the plate efficiency is shared 40 : 15 : 45 between the three';
 
 export const pumpParameters: readonly ParameterSpec[] = [
   number(

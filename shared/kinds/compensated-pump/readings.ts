@@ -68,7 +68,7 @@ export const pumpReadings: readonly ReadingSpec[] = [
     quantity: 'torque',
     value: torque,
     explain: explain(
-      'T = α·D·Δp + cV·w + (Tc0 + kTp·D·Δp)·sign(w)',
+      'T = α·D·Δp + cV·w + (Tc0 + kTp·D·|Δp|)·sign(w)',
       'Δp outlet − suction; cV, Tc0, kTp from the torque efficiency',
       ['stroke', 'displacement', 'torqueEfficiency', 'outletPressure'],
       'Friction does not show the minimum that real pumps have at low speed.',

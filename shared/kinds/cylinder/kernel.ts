@@ -2,7 +2,18 @@ import { sine } from '../../fluid/elementary.ts';
 import { indices } from '../build.ts';
 import type { Block, Plate, RunConstants, Workspace } from '../kind.ts';
 import { Memo } from '../memo.ts';
-import { capArea, friction, frictionSlope, GRAVITY, hydraulicForce, rodSideArea, workShare, workShareSlope } from './laws.ts';
+import {
+  capArea,
+  friction,
+  frictionSlope,
+  GRAVITY,
+  hydraulicForce,
+  rodSideArea,
+  workHold,
+  workHoldSlope,
+  workShare,
+  workShareSlope,
+} from './laws.ts';
 
 export const cylinderCoefficients = [
   'areaA',
@@ -22,6 +33,7 @@ export const cylinderCoefficients = [
   'workTravel',
   'workForce',
   'workShape',
+  'springback',
   'stopStiffness',
   'stopDamping',
   'start',
@@ -63,6 +75,7 @@ export function prepareCylinder(plate: Plate, run: RunConstants): Record<(typeof
     workTravel: Math.max(1e-3, plate.number('workFull') - contact),
     workForce: plate.number('workForce'),
     workShape: Number(plate.choice('workShape')),
+    springback: plate.number('workSpringback'),
     stopStiffness: plate.given('raw.stopStiffness') ?? STOP_STIFFNESS,
     stopDamping: plate.given('raw.stopDamping') ?? STOP_DAMPING,
     start: 0,
@@ -102,6 +115,7 @@ export interface CylinderPoint {
   leakage: number;
   acceleration: number;
   loadByPosition: number;
+  loadByVelocity: number;
   frictionByVelocity: number;
   stopByPosition: number;
   stopByVelocity: number;
@@ -117,6 +131,7 @@ const point: CylinderPoint = {
   leakage: 0,
   acceleration: 0,
   loadByPosition: 0,
+  loadByVelocity: 0,
   frictionByVelocity: 0,
   stopByPosition: 0,
   stopByVelocity: 0,
@@ -160,10 +175,13 @@ export function evaluateCylinder(block: Block, i: number, w: Workspace): Cylinde
   const travel = c[b + C.workTravel]!;
   const shape = c[b + C.workShape]!;
   const full = c[b + C.workForce]!;
+  const springback = c[b + C.springback]!;
+  const work = full * workShare(x, contact, travel, shape);
+  const hold = workHold(v, springback);
   const springOn = x > c[b + C.springFrom]! ? c[b + C.springRate]! : 0;
-  point.load =
-    u[block.input[n + U.load]!]! + c[b + C.weight]! + springOn * (x - c[b + C.springFrom]!) + full * workShare(x, contact, travel, shape);
-  point.loadByPosition = springOn + full * workShareSlope(x, contact, travel, shape);
+  point.load = u[block.input[n + U.load]!]! + c[b + C.weight]! + springOn * (x - c[b + C.springFrom]!) + hold * work;
+  point.loadByPosition = springOn + hold * full * workShareSlope(x, contact, travel, shape);
+  point.loadByVelocity = work * workHoldSlope(v, springback);
 
   const bound = c[b + C.bound]! * u[block.input[n + U['bound-rod']]!]!;
   const coulomb = c[b + C.coulomb]! + bound;
@@ -248,6 +266,6 @@ export function cylinderJacobian(block: Block, w: Workspace): void {
     add(block, w, e + 9, areaA / mass);
     add(block, w, e + 10, -areaB / mass);
     add(block, w, e + 11, (-q.loadByPosition + q.stopByPosition) / mass);
-    add(block, w, e + 12, (-q.frictionByVelocity + q.stopByVelocity) / mass);
+    add(block, w, e + 12, (-q.loadByVelocity - q.frictionByVelocity + q.stopByVelocity) / mass);
   }
 }

@@ -1,4 +1,4 @@
-import { smoothSign, smoothSignSlope } from '../../numerics/smooth.ts';
+import { smoothSign, smoothSignSlope, smoothStep, smoothStepSlope } from '../../numerics/smooth.ts';
 
 /** Laws of the double-acting cylinder as plain functions; `prepare`, the kernel and the checks call them. SI throughout. */
 
@@ -50,4 +50,18 @@ export function workShareSlope(x: number, contact: number, travel: number, shape
   const z = (x - contact) / travel;
   if (z <= 0) return 0;
   return (shape === 1 ? 1 : shape === 2 ? 2 * z : 3 * z * z) / travel;
+}
+
+/** Rod speed by which the work has let go when the rod goes back [m/s]. */
+export const RELEASE_SPEED = 0.02;
+
+/** Share of the work's force that is there at a rod speed: all of it while the rod pushes or stands, only the springback
+ *  (0 … 1) once it goes back; smooth between 0 and −20 mm/s. */
+export function workHold(v: number, springback: number): number {
+  return springback + (1 - springback) * smoothStep(1 + v / RELEASE_SPEED);
+}
+
+/** d(workHold)/dv [s/m]. */
+export function workHoldSlope(v: number, springback: number): number {
+  return ((1 - springback) * smoothStepSlope(1 + v / RELEASE_SPEED)) / RELEASE_SPEED;
 }

@@ -6,7 +6,8 @@ import * as S from '../sources.ts';
 
 const MOTION = 'm·dv/dt = pA·AA − pB·AB − load − friction + end stop';
 const FRICTION = 'friction = (Fc + (Fs − Fc)/(1 + (v/0.02)²))·sign(v) + b·v, the sign rounded within 2 mm/s';
-const WORK = 'work force = force at full·((x − contact)/(full − contact))^shape for x beyond contact, continuing beyond full';
+const WORK =
+  'work force = force at full·((x − contact)/(full − contact))^shape for x beyond contact, continuing beyond full; × springback once the rod goes back (below −20 mm/s)';
 
 export const cylinderParameters: readonly ParameterSpec[] = [
   number('plate', 'bore', 'Bore', 'length', 0.063, [0.005, 1], 'Piston diameter.', S.PRACTICE, { equation: 'AA = π·bore²/4' }),
@@ -71,7 +72,7 @@ export const cylinderParameters: readonly ParameterSpec[] = [
     'force',
     0,
     [0, 1e8],
-    'Force at the position where the work is done; 0 means no work. The work springs back with the rod.',
+    'Force at the position where the work is done; 0 means no work.',
     S.CHOICE,
     { equation: WORK },
   ),
@@ -87,6 +88,17 @@ export const cylinderParameters: readonly ParameterSpec[] = [
     '2',
     'How the force rises: straight like a spring, or ever steeper like a bale.',
     S.CHOICE,
+  ),
+  number(
+    'load',
+    'workSpringback',
+    'Springback of the work',
+    'fraction',
+    1,
+    [0, 1],
+    'Share of the work’s force that pushes back once the rod retreats: 100 % for a spring, a few per cent for card or metal that stays pressed.',
+    S.CHOICE,
+    { equation: WORK },
   ),
   number(
     'load',
