@@ -39,7 +39,7 @@ function measured(base: Base, drives: readonly DriveLoad[], requirement: Require
     return margins.length === 0 || margins.includes(null) ? null : Math.min(...(margins as number[]));
   }
   if (requirement.quantity === 'rms current')
-    return drives.length === 0 ? null : Math.max(...drives.map((drive) => drive.yardsticks.rmsCurrent));
+    return drives.every((drive) => drive.running === null) ? null : Math.max(...drives.map((drive) => drive.yardsticks.rmsCurrent));
   const values = base.column(requirement.quantity);
   const window = phaseWindow(base, requirement.phase);
   if (!values || window.from > base.end) return null;

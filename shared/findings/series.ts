@@ -87,3 +87,19 @@ export function firstReach(times: Float64Array, values: Float64Array, level: num
   }
   return null;
 }
+
+/** Value that a column is under for half of a window's time; 0 for an empty one. */
+export function median(times: Float64Array, values: Float64Array, window: Window): number {
+  const pieces: { value: number; time: number }[] = [];
+  for (let i = 1; i < times.length; i++) {
+    const time = Math.min(times[i]!, window.to) - Math.max(times[i - 1]!, window.from);
+    if (time > 0) pieces.push({ value: (values[i]! + values[i - 1]!) / 2, time });
+  }
+  pieces.sort((a, b) => a.value - b.value);
+  let left = pieces.reduce((sum, piece) => sum + piece.time, 0) / 2;
+  for (const piece of pieces) {
+    left -= piece.time;
+    if (left <= 0) return piece.value;
+  }
+  return 0;
+}

@@ -3,7 +3,7 @@ import type { Base, DriveLoad } from './context.ts';
 import type { Yardsticks } from './finding.ts';
 import { RUN_UP_EXTRA, STALL_TIME } from './house-rules.ts';
 import { type MotorFacts, motorFacts } from './motor-facts.ts';
-import { firstReach, highest, integrate, lowest, mean, stretches, type Window } from './series.ts';
+import { firstReach, highest, integrate, lowest, mean, median, stretches, type Window } from './series.ts';
 
 /** Signal of the motor kind that says its relay has tripped. */
 const OVERLOAD_TRIP = 'overload-trip';
@@ -58,7 +58,7 @@ function driveLoad(base: Base, motor: string, facts: MotorFacts): DriveLoad {
   const yardsticks: Yardsticks = {
     motor,
     stalled: stall !== undefined,
-    ...(stall ? { stallTime: stall.from, stallCurrent: mean(times, current, settled(stall)) } : {}),
+    ...(stall ? { stallTime: stall.from, stallCurrent: median(times, current, stall) } : {}),
     stallMargin: stall || running === null || peakTorque <= 0 ? null : lowestPullOut / peakTorque,
     rmsCurrent: rmsCurrent / facts.ratedCurrent,
     rmsTorque: rmsTorque / facts.ratedTorque,
@@ -77,11 +77,6 @@ function driveLoad(base: Base, motor: string, facts: MotorFacts): DriveLoad {
     voltage,
     lowestPullOut,
   };
-}
-
-/** The second half of a stall: what it settles to. */
-export function settled(stall: Window): Window {
-  return { from: (stall.from + stall.to) / 2, to: stall.to };
 }
 
 function backUp(base: Base, motor: string, facts: MotorFacts, window: Window): boolean {
@@ -129,7 +124,7 @@ function relayTime(base: Base, motor: string, facts: MotorFacts, load: Window, s
   if (stall) {
     const heat = base.column(`${motor}.overloadHeat`);
     const warm = heat ? heat[heat.length - 1]! : 0;
-    const rest = closedForm(mean(base.times, squares, settled(stall)), relay.tau, warm);
+    const rest = closedForm(median(base.times, squares, stall), relay.tau, warm);
     return rest === null ? null : base.end + rest;
   }
   if (!base.seen.duty.repeat) return null;

@@ -128,6 +128,7 @@ export const crowdedCircuit: CircuitDocument = sample({
       workContact: millimetres(150),
       workFull: millimetres(400),
       workForce: kilonewtons(50),
+      workSpringback: percent(2),
       ratedPressure: bar(250),
     }),
     part('V5', 'directional-valve-4-3', [38, 21], {
@@ -161,7 +162,7 @@ export const crowdedCircuit: CircuitDocument = sample({
       ratedPressure: bar(250),
     }),
     part('J5', 'junction', [70, 37], { shape: choice('tee') }),
-    part('S3', 'flow-meter', [75, 35.5], {
+    part('S3', 'flow-meter', [55, 24.5], {
       ratedFlow: litres(60),
       ratedDrop: bar(1),
     }),
@@ -187,7 +188,8 @@ export const crowdedCircuit: CircuitDocument = sample({
     pipe('L9', 'J3.d', 'V5.P', 0.5, 16),
     pipe('L10', 'J3.b', 'J2.a', 0.5, 16),
     pipe('L11', 'J2.c', 'S1.M', 0.5, 4),
-    pipe('L12', 'J2.b', 'V3.P', 1.5, 16),
+    pipe('L12', 'J2.b', 'S3.A', 0.5, 19),
+    pipe('L23', 'S3.B', 'V3.P', 2.5, 19),
     pipe('L13', 'V3.A', 'J4.c', 0.5, 16),
     pipe('L14', 'J4.a', 'A1.A', 1.5, 16),
     pipe('L15', 'J4.b', 'S2.M', 0.5, 4),
@@ -200,8 +202,7 @@ export const crowdedCircuit: CircuitDocument = sample({
     pipe('L19', 'V4.B', 'V5.B', 1, 12),
     pipe('L20', 'V3.T', 'J5.d', 1.5, 20),
     pipe('L21', 'V5.T', 'J5.a', 1, 20),
-    pipe('L22', 'J5.b', 'S3.A', 0.5, 20),
-    pipe('L23', 'S3.B', 'Z2.A', 0.5, 20),
+    pipe('L22', 'J5.b', 'Z2.A', 0.5, 20),
     pipe('L24', 'Z2.B', 'T4.T', 0.5, 20),
   ],
   shafts: [shaftOf('shaft1', 'M1.shaft', 'P1.shaft')],

@@ -117,6 +117,7 @@ export const demoCircuit: CircuitDocument = sample({
       workContact: millimetres(60),
       workFull: millimetres(350),
       workForce: kilonewtons(52),
+      workSpringback: percent(2),
       workShape: choice('1'),
       ratedPressure: bar(250),
     }),
@@ -139,7 +140,7 @@ export const demoCircuit: CircuitDocument = sample({
     pipe('L6', 'V2.T', 'T3.T', 1, 20),
     pipe('L7', 'J1.b', 'J2.a', 0.5, 16),
     pipe('L8', 'J2.d', 'S1.M', 0.5, 4),
-    pipe('L9', 'J2.b', 'V3.P', 2.5, 16),
+    pipe('L9', 'J2.b', 'V3.P', 4, 19),
     pipe('L10', 'V3.A', 'A1.A', 1.5, 16),
     pipe('L11', 'A1.B', 'V3.B', 1.5, 16),
     pipe('L12', 'V3.T', 'Z1.A', 1.5, 20),
@@ -147,13 +148,13 @@ export const demoCircuit: CircuitDocument = sample({
   ],
   shafts: [shaftOf('shaft1', 'M1.shaft', 'P1.shaft')],
   duty: {
-    duration: 8.5,
+    duration: 8,
     repeat: true,
     commands: [
       flag('start', 0, 'Start', 'M1.contactor', 1),
       flag('press', 0.6, 'Solenoid a on', 'V3.spool', 1, 0.05),
-      flag('open', 5.4, 'Solenoid b on', 'V3.spool', -1, 0.05),
-      flag('rest', 8, 'Centre', 'V3.spool', 0, 0.05),
+      flag('open', 5.2, 'Solenoid b on', 'V3.spool', -1, 0.05),
+      flag('rest', 7.4, 'Centre', 'V3.spool', 0, 0.05),
     ],
   },
   requirements: [

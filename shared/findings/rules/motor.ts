@@ -4,8 +4,7 @@ import type { Finding } from '../finding.ts';
 import { VOLTAGE_BAND } from '../house-rules.ts';
 import { current, displacement, figure, moment, pressure, say, torque } from '../phrase.ts';
 import { stopIn } from '../remedies.ts';
-import { highest, mean } from '../series.ts';
-import { settled } from '../yardsticks.ts';
+import { highest, median } from '../series.ts';
 
 /** Motor stalls, dips past pull-out and recovers, does not come up to speed. */
 export function motorRules(context: FindingContext): Finding[] {
@@ -21,7 +20,7 @@ function stalls(context: FindingContext, drive: DriveLoad): Finding {
   const time = yardsticks.stallTime ?? 0;
   const pump = drive.pumps[0]?.id;
   const speed = context.column(`${motor}.speed`);
-  const crawl = speed && drive.stall ? Math.abs(mean(context.times, speed, settled(drive.stall))) : 0;
+  const crawl = speed && drive.stall ? Math.abs(median(context.times, speed, drive.stall)) : 0;
   const port = pump ? context.at(`${pump}.outlet.pressure`, time) : 0;
   const asks = pump
     ? say(

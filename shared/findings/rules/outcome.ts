@@ -43,11 +43,11 @@ export function requirementRules(context: FindingContext, found: readonly Findin
 }
 
 /** A missed motor requirement is already a finding when the motor stalls or its margin is small; a missed force or time when
- *  the rod stops short or the motor stalls. */
+ *  the rod stops short, the motor stalls or the run failed. */
 function saidElsewhere(context: FindingContext, result: RequirementResult, found: readonly Finding[]): boolean {
   const { requirement } = result;
   if (found.some((entry) => entry.rule === 'rod-stops-short' && entry.component === componentOf(context, result))) return true;
-  if (found.some((entry) => entry.rule === 'motor-stalls' || entry.rule === 'not-up-to-speed')) return true;
+  if (found.some((entry) => entry.rule === 'motor-stalls' || entry.rule === 'not-up-to-speed' || entry.rule === 'run-failed')) return true;
   if (requirement.quantity === 'stall margin')
     return context.drives.some((drive) => drive.yardsticks.stallMargin === null || drive.yardsticks.stallMargin < 1.25);
   return (

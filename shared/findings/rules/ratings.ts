@@ -161,6 +161,8 @@ function pushed(context: FindingContext, cylinder: Component): Finding[] {
   const rod = context.column(`${id}.B.pressure`);
   const outlet = context.column(`${pump}.outlet.pressure`);
   if (!cap || !rod || !outlet) return [];
+  // Oil that the pump has pushed up and a check valve has shut in is no load: compare with the highest outlet pressure so far.
+  const ceiling = runningMost(outlet);
   const side = [
     { port: 'A', word: 'cap side', values: cap, other: rod },
     { port: 'B', word: 'rod side', values: rod, other: cap },
@@ -169,7 +171,7 @@ function pushed(context: FindingContext, cylinder: Component): Finding[] {
       ...entry,
       stretch: stretches(
         context.times,
-        (i) => Math.min(entry.values[i]! - 1.03 * Math.max(deadHead, outlet[i]!), entry.values[i]! - 1.05 * entry.other[i]!),
+        (i) => Math.min(entry.values[i]! - 1.03 * Math.max(deadHead, ceiling[i]!), entry.values[i]! - 1.05 * entry.other[i]!),
         0.1,
       )[0],
     }))
@@ -199,4 +201,10 @@ function pushed(context: FindingContext, cylinder: Component): Finding[] {
       caution: RELIEF_IS_THE_SAFETY_DEVICE,
     },
   ];
+}
+
+function runningMost(values: Float64Array): Float64Array {
+  const most = Float64Array.from(values);
+  for (let i = 1; i < most.length; i++) most[i] = Math.max(most[i]!, most[i - 1]!);
+  return most;
 }

@@ -14,10 +14,12 @@ export function rodRules(context: FindingContext): Finding[] {
 }
 
 const REST_TIME = 0.3;
-/** A chamber that is still filling is not stuck: gauge pressure on the commanded side [Pa]. */
-const FILLED = 2e4;
+/** With less on the commanded side while another rod moves, the oil goes there first [Pa]. */
+const FILLED = 5e5;
 /** At an end: within this of it [m]. */
 const END = 1e-3;
+/** Another rod moves above this [m/s]. */
+const MOVES = 5e-3;
 /** Force counts as reached from this share on. */
 const ENOUGH = 0.995;
 
@@ -49,13 +51,19 @@ function stopsShort(context: FindingContext, cylinder: Component): Finding[] {
   const needed = neededForce(context, id);
   const turning = (i: number) =>
     context.drives.length === 0 || context.drives.some((drive) => isTurning(context, drive.component.id, i, drive.facts.pullOutSpeed));
+  const others = context
+    .ofKind('cylinder')
+    .filter((entry) => entry.id !== id)
+    .map((entry) => context.column(`${entry.id}.velocity`));
+  const othersMove = (i: number) => others.some((values) => values !== null && Math.abs(values[i]!) > MOVES);
   const stuck = stretches(
     context.times,
     (i) => {
       const x = position[i]!;
       const way = command(i);
       if (way === 0 || !turning(i) || Math.abs(velocity[i]!) >= AT_REST) return -1;
-      if ((way > 0 ? cap[i]! : rod[i]!) < FILLED) return -1;
+      if ((way > 0 ? cap[i]! : rod[i]!) < FILLED && othersMove(i)) return -1;
+      if ((way > 0 ? cap[i]! : rod[i]!) < 0) return -1;
       if ((way > 0 && x > stroke - END) || (way < 0 && x < END)) return -1;
       if (way > 0 && needed !== null && load && load[i]! >= ENOUGH * needed) return -1;
       return 1;
