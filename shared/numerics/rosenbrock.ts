@@ -147,7 +147,7 @@ export class Rosenbrock implements Integrator {
     else this.ft.fill(0);
 
     const least = 1e-15 * Math.abs(t) + 1e-30;
-    let h = this.h;
+    let h = Math.min(this.h, options.longestStep);
     let rejectedBefore = false;
     for (;;) {
       const left = this.end - t;

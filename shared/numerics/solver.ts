@@ -41,6 +41,8 @@ export interface SolverOptions {
   readonly tolerance: number;
   /** First step after a start or an event [s]. */
   readonly firstStep: number;
+  /** Longest step [s]: bounds how far dense output is stretched between two accepted states. */
+  readonly longestStep: number;
   /** Steps, rejected ones included, after which the run is given up. */
   readonly stepCap: number;
   /** The relative part of a state's tolerance stops growing at this many nominal sizes [30]: at 500 bar a difference of a fraction
@@ -52,6 +54,7 @@ export interface SolverOptions {
 export const defaultSolverOptions: SolverOptions = {
   tolerance: 1e-4,
   firstStep: 1e-4,
+  longestStep: Number.POSITIVE_INFINITY,
   stepCap: 200_000,
   relativeLimit: 30,
 };

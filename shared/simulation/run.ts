@@ -13,6 +13,9 @@ import { CircuitSystem } from './system.ts';
 
 /** Steps between two hand-backs to the host. */
 const STEPS_PER_YIELD = 16;
+/** Longest step: a hundredth of the duty, at most this [s]. Between accepted states channels and energy accounts live on the dense
+ *  output, which is of lower order than the steps. */
+const LONGEST_STEP = 0.25;
 /** Pressure that counts as left behind [Pa], and flow below which a net counts as shut [m³/s]. */
 const LEFT_PRESSURE = 5e5;
 const SHUT_FLOW = 0.1e-3 / 60;
@@ -37,7 +40,12 @@ export interface RunProgress {
  *  give way or stop. Returns the result; a run that cannot go on returns what it has, with the reason and where it stuck. */
 export function* runSimulation(circuit: CompiledCircuit, options: RunOptions): Generator<RunProgress, RunResult> {
   const system = new CircuitSystem(circuit);
-  const solverOptions = { ...defaultSolverOptions, tolerance: options.tolerance, stepCap: options.stepCap ?? defaultSolverOptions.stepCap };
+  const solverOptions = {
+    ...defaultSolverOptions,
+    tolerance: options.tolerance,
+    stepCap: options.stepCap ?? defaultSolverOptions.stepCap,
+    longestStep: Math.min(circuit.duration / 100, LONGEST_STEP),
+  };
   const integrator = new Rosenbrock(system, new SparseLu(circuit.pattern, circuit.symbolic), solverOptions);
   const recorder = new StepRecorder(system);
   const hash = new BitHash();
