@@ -1,4 +1,5 @@
 import { create } from 'zustand';
+import { emptyCircuit } from '#shared/circuit/edit/empty-circuit.ts';
 import type { CircuitDocument } from '#shared/circuit/schema.ts';
 
 /** The circuit in hand and its history. Documents are immutable: every edit makes a new one through a pure function of
@@ -31,42 +32,24 @@ export interface DocumentState {
 
 const HISTORY = 200;
 
-const empty: CircuitDocument = {
-  format: 'swashbench-circuit',
-  version: 1,
-  title: 'Untitled circuit',
-  fluid: {
-    grade: 'VG 46',
-    temperature: 313.15,
-    airFraction: 0.005,
-    bulkModulus: 1.7e9,
-    density: 870,
-  },
-  reservoir: { volume: 0.12, temperature: 313.15, coolingArea: 1.2 },
-  supply: { voltage: 400, frequency: 50, impedance: 0 },
-  site: { altitude: 0 },
-  components: [],
-  lines: [],
-  shafts: [],
-  duty: { duration: 5, repeat: true, commands: [] },
-  requirements: [],
-  cases: [{ id: 'a', name: 'As found', ink: 0, changes: [] }],
-  tagPlaces: {},
-  labels: [],
-  notes: [],
-};
-
-function keepCases(document: CircuitDocument, activeCase: string, overlays: readonly string[]) {
+/** What of the view still exists in a document: the case on the drawing, the overlays, the selection, the tag in hand. */
+function keepView(document: CircuitDocument, state: Pick<DocumentState, 'activeCase' | 'overlays' | 'selection' | 'inHand'>) {
   const ids = document.cases.map((entry) => entry.id);
-  const active = ids.includes(activeCase) ? activeCase : (ids[0] as string);
+  const active = ids.includes(state.activeCase) ? state.activeCase : (ids[0] as string);
+  const lists = [document.components, document.lines, document.notes, document.labels];
+  const gone = state.selection.some((id) => lists.every((list) => list.every((entry) => entry.id !== id)));
+  const held = state.inHand?.split('.')[0];
+  const holds = held === undefined || held === 'supply' || document.components.some((entry) => entry.id === held);
   return {
+    inHand: holds ? state.inHand : null,
     activeCase: active,
-    overlays: overlays.filter((id) => ids.includes(id) && id !== active),
+    overlays: state.overlays.filter((id) => ids.includes(id) && id !== active),
+    selection: gone ? state.selection.filter((id) => lists.some((list) => list.some((entry) => entry.id === id))) : state.selection,
   };
 }
 
 export const useDocument = create<DocumentState>()((set) => ({
-  document: empty,
+  document: emptyCircuit(),
   activeCase: 'a',
   overlays: [],
   selection: [],
@@ -94,7 +77,7 @@ export const useDocument = create<DocumentState>()((set) => ({
         document,
         past,
         future: [],
-        ...keepCases(document, state.activeCase, state.overlays),
+        ...keepView(document, state),
       };
     }),
   beginGesture: () => set((state) => (state.gesture ? {} : { gesture: state.document })),
@@ -109,14 +92,16 @@ export const useDocument = create<DocumentState>()((set) => ({
     }),
   undo: () =>
     set((state) => {
-      const document = state.past[state.past.length - 1];
+      // A gesture in progress is a step of its own: undoing it goes back to where it began.
+      const begun = state.gesture !== null && state.gesture !== state.document ? state.gesture : null;
+      const document = begun ?? state.past[state.past.length - 1];
       if (!document) return {};
       return {
         document,
-        past: state.past.slice(0, -1),
+        past: begun ? state.past : state.past.slice(0, -1),
         future: [state.document, ...state.future],
         gesture: null,
-        ...keepCases(document, state.activeCase, state.overlays),
+        ...keepView(document, state),
       };
     }),
   redo: () =>
@@ -128,7 +113,7 @@ export const useDocument = create<DocumentState>()((set) => ({
         past: [...state.past, state.document],
         future: state.future.slice(1),
         gesture: null,
-        ...keepCases(document, state.activeCase, state.overlays),
+        ...keepView(document, state),
       };
     }),
   setActiveCase: (caseId) =>

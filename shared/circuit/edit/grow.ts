@@ -6,6 +6,7 @@ import type { CircuitDocument, PortRef } from '../schema.ts';
 import { addComponent, type Point, snapPoint } from './components.ts';
 import { connect, isOpen, lineAt, splitLine } from './joins.ts';
 import { freePlace, portPlace, sideSteps, spotAt } from './place-parts.ts';
+import { seatJunction } from './seat-junction.ts';
 
 /** Growing a circuit from its open ports: a new part is put at a sensible free place and joined in one edit. */
 export interface Grown {
@@ -48,7 +49,8 @@ function addAt(document: CircuitDocument, ref: PortRef, from: Point, side: Side,
   const added = spot && addComponent(document, kindId, spot.at, spot.turn, spot.mirror);
   if (!added?.componentId) return refused(document, 'The sheet is full.');
   const joined = connect(added.document, ref, { component: added.componentId, port: entry });
-  return joined.problem ? refused(document, joined.problem) : { document: joined.document, componentId: added.componentId, problem: null };
+  if (joined.problem) return refused(document, joined.problem);
+  return { document: seatJunction(joined.document, ref.component), componentId: added.componentId, problem: null };
 }
 
 /** Port, junction, part below or above it; the junction's far arm stays open. */

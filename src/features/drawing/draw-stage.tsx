@@ -1,0 +1,82 @@
+import './drawing.css';
+import { type ReactNode, useEffect, useRef } from 'react';
+import { ReactFlowProvider, useReactFlow } from 'reactflow';
+import { useSize } from '#src/lib/use-size.ts';
+import { useDocument } from '#src/stores/document-store.ts';
+import { DrawBar } from './draw-bar.tsx';
+import { useDrawing } from './drawing-store.ts';
+import { EmptySheet } from './empty-sheet.tsx';
+import { NextStrip } from './next-strip.tsx';
+import { PartsDrawer } from './parts-drawer.tsx';
+import { ProblemSlips } from './problem-slips.tsx';
+import { SelectionTools } from './selection-tools.tsx';
+import { Sheet } from './sheet.tsx';
+import { useDrawKeys } from './use-draw-keys.ts';
+
+/** The Draw stage: the line above, the sheet, the parts drawer. `children` are laid over the sheet (the open nameplate). */
+export function DrawStage({ children }: { readonly children?: ReactNode }) {
+  return (
+    <ReactFlowProvider>
+      <Stage>{children}</Stage>
+    </ReactFlowProvider>
+  );
+}
+
+const fit = { padding: 0.16, maxZoom: 1.4 };
+
+function Stage({ children }: { readonly children?: ReactNode }) {
+  const [sheet, room] = useSize<HTMLDivElement>();
+  const flow = useReactFlow();
+  const empty = useDocument((state) => state.document.components.length === 0 && state.document.notes.length === 0);
+  const said = useDrawing((state) => state.said);
+  const keys = useDrawKeys({ in: () => void flow.zoomIn(), out: () => void flow.zoomOut(), fit: () => void flow.fitView(fit) });
+  useFocusWhenDrawn(sheet);
+  useEffect(
+    () => () =>
+      useDrawing
+        .getState()
+        .set({ strip: null, preview: null, placing: null, deletion: null, writing: null, joinFrom: null, said: '', focus: null }),
+    [],
+  );
+  const refit = () => setTimeout(() => void flow.fitView(fit), 60);
+
+  return (
+    <main className="draw-stage">
+      <DrawBar room={room} />
+      <section ref={sheet} className="draw-sheet" aria-label="The sheet" tabIndex={-1} {...keys}>
+        <Sheet />
+        <ProblemSlips />
+        <SelectionTools width={room.width} height={room.height} />
+        <NextStrip width={room.width} height={room.height} />
+        {empty && <EmptySheet onTaken={refit} />}
+        {children}
+      </section>
+      <PartsDrawer room={room} />
+      <p className="visually-hidden" aria-live="polite">
+        {said}
+      </p>
+    </main>
+  );
+}
+
+/** Gives the focus to what an action asked for, as soon as the canvas has drawn it. */
+function useFocusWhenDrawn(sheet: React.RefObject<HTMLElement | null>) {
+  const focus = useDrawing((state) => state.focus);
+  const tries = useRef(0);
+  useEffect(() => {
+    if (!focus) return;
+    tries.current = 0;
+    let frame = 0;
+    const look = () => {
+      const [what, id = ''] = focus.split(' ');
+      const selector = what === 'port' ? `[data-ring="${id}"]` : `[data-part="${id}"]`;
+      const element = sheet.current?.querySelector<HTMLElement>(selector);
+      if (element || tries.current++ > 20) {
+        element?.focus({ preventScroll: true });
+        useDrawing.getState().set({ focus: null });
+      } else frame = requestAnimationFrame(look);
+    };
+    look();
+    return () => cancelAnimationFrame(frame);
+  }, [focus, sheet]);
+}

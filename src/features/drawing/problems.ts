@@ -1,0 +1,72 @@
+import { useDeferredValue, useMemo } from 'react';
+import { growFrom } from '#shared/circuit/edit/grow.ts';
+import { isOpen } from '#shared/circuit/edit/joins.ts';
+import { removeItems } from '#shared/circuit/edit/removal.ts';
+import type { CircuitDocument } from '#shared/circuit/schema.ts';
+import { compileCircuit } from '#shared/simulation/compile.ts';
+import type { Problem } from '#shared/simulation/result.ts';
+import { useDocument } from '#src/stores/document-store.ts';
+import { openNameplate } from '#src/stores/nameplate-store.ts';
+import { growAt } from './actions.ts';
+import { openStrip, partFocus, say, useDrawing } from './drawing-store.ts';
+
+/** What is missing or taken for granted, as compiling the circuit says it. */
+
+let last: { document: CircuitDocument; caseId: string; problems: readonly Problem[] } | null = null;
+
+export function drawingProblems(document: CircuitDocument, caseId: string): readonly Problem[] {
+  if (last?.document === document && last.caseId === caseId) return last.problems;
+  const compiled = compileCircuit(document, caseId);
+  const found = compiled.ok ? compiled.notes : compiled.problems;
+  const problems = document.components.length === 0 ? [] : found;
+  last = { document, caseId, problems };
+  return problems;
+}
+
+/** Problems of the case on the drawing; while a part is dragged they follow as time allows. */
+export function useDrawingProblems(): readonly Problem[] {
+  const document = useDeferredValue(useDocument((state) => state.document));
+  const activeCase = useDocument((state) => state.activeCase);
+  return useMemo(() => drawingProblems(document, activeCase), [document, activeCase]);
+}
+
+const grows: Partial<Record<NonNullable<Problem['cure']>['action'], string>> = {
+  'add-tank': 'tank',
+  'add-relief': 'relief-valve',
+  'add-drive': 'electric-motor',
+};
+
+const MOST_GHOSTS = 4;
+
+/** The circuit as each cure would leave it, for the first few cures that add something at an open port. */
+export function cureGhosts(document: CircuitDocument, problems: readonly Problem[]): CircuitDocument[] {
+  return problems
+    .flatMap((problem) => {
+      const cure = problem.cure;
+      const kind = cure && problem.severity === 'problem' ? grows[cure.action] : undefined;
+      if (!kind || !cure?.component || !cure.port) return [];
+      const ref = { component: cure.component, port: cure.port };
+      if (!isOpen(document, ref)) return [];
+      const grown = growFrom(document, ref, kind);
+      return grown.componentId ? [grown.document] : [];
+    })
+    .slice(0, MOST_GHOSTS);
+}
+
+/** Does what a cure's link says. */
+export function applyCure(problem: Problem) {
+  const cure = problem.cure;
+  if (!cure) return;
+  const kind = grows[cure.action];
+  const ref = cure.component && cure.port ? { component: cure.component, port: cure.port } : null;
+  if (kind && ref) return growAt(ref, kind);
+  if (cure.action === 'join' && ref) return openStrip(ref, 'next');
+  if (cure.action === 'open-nameplate' && cure.component) return openNameplate(cure.component);
+  if (cure.action === 'delete-line' && cure.line) {
+    const { line } = cure;
+    useDocument.getState().edit((document) => removeItems(document, [line]));
+    return say('The line is deleted');
+  }
+  const where = problem.component;
+  if (where) useDrawing.getState().set({ focus: partFocus(where) });
+}
