@@ -1,4 +1,5 @@
 import { CautionLine } from '#src/components/caution-line.tsx';
+import { DrawStage } from '#src/features/drawing/draw-stage.tsx';
 import { useLayout } from '#src/lib/layout.ts';
 import { NoticeStrip } from '../notice-strip.tsx';
 import { TopLine } from '../top-line.tsx';
@@ -10,7 +11,7 @@ export function DrawRoute() {
     <div className={`screen screen-${layout} screen-draw`}>
       <TopLine screen="draw" />
       <NoticeStrip />
-      <main className="draw-stage" />
+      <DrawStage />
       <footer className="draw-caution">
         <CautionLine form={layout === 'desk' ? 'whole' : 'half'} />
       </footer>
