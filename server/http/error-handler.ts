@@ -88,7 +88,7 @@ function fromRouter(error: unknown): AppError | null {
 export const notFound: RequestHandler = (request, _response, next) => {
   next(
     new AppError('not-found', {
-      message: `There is nothing at ${request.path.slice(0, 200)}.`,
+      message: `There is nothing at ${(request.originalUrl.split('?')[0] as string).slice(0, 200)}.`,
     }),
   );
 };

@@ -1,5 +1,6 @@
-import { mkdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
+import { makeFolder } from './make-folder.mjs';
 import { guarded, Problem } from './problem.mjs';
 
 /** When the process was born, in clock ticks since boot: tells a process from a later one with the same number. */
@@ -15,7 +16,7 @@ function birth(pid) {
 /** One launcher per data folder. @returns {() => void} gives the folder free again */
 export function lockData(folder) {
   const file = join(folder, 'launcher.json');
-  guarded(folder, () => mkdirSync(folder, { recursive: true, mode: 0o755 }));
+  makeFolder(folder);
   const mine = JSON.stringify({ pid: process.pid, birth: birth(process.pid) });
   const take = () => guarded(folder, () => writeFileSync(file, mine, { flag: 'wx' }));
   try {

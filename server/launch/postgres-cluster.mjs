@@ -5,6 +5,7 @@ import { createServer } from 'node:net';
 import { join } from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
 import { checkReach, databaseUser } from './database-user.mjs';
+import { makeFolder } from './make-folder.mjs';
 import { clearRemains } from './postgres-remains.mjs';
 import { guarded, Problem, systemSentence } from './problem.mjs';
 import { mustRun } from './run-tool.mjs';
@@ -39,13 +40,18 @@ async function createCluster(bin, folder, cluster, user, careless) {
     if (user) for (const path of [half, passwordFile]) chownSync(path, user.uid, user.gid);
   });
   const auth = ['--auth=scram-sha-256', `--username=${ROLE}`, `--pwfile=${passwordFile}`, '--encoding=UTF8', '--locale=C.UTF-8'];
-  await mustRun(join(bin, 'initdb'), ['-D', half, ...auth, ...(careless ? ['--no-sync'] : [])], {
-    doing: 'Creating the database',
-    where: folder,
-    cwd: '/',
-    uid: user?.uid,
-    gid: user?.gid,
-  });
+  try {
+    await mustRun(join(bin, 'initdb'), ['-D', half, ...auth, ...(careless ? ['--no-sync'] : [])], {
+      doing: 'Creating the database',
+      where: folder,
+      cwd: '/',
+      uid: user?.uid,
+      gid: user?.gid,
+    });
+  } catch (error) {
+    rmSync(half, { recursive: true, force: true });
+    throw error;
+  }
   guarded(folder, () => renameSync(half, cluster));
 }
 
@@ -91,7 +97,7 @@ async function startServer(bin, folder, cluster, user, careless) {
 export async function startCluster({ bin, folder, careless = false }) {
   const user = databaseUser();
   const cluster = join(folder, 'postgres');
-  guarded(folder, () => mkdirSync(folder, { recursive: true }));
+  makeFolder(folder);
   checkReach(folder, user);
   if (!existsSync(join(cluster, 'PG_VERSION'))) await createCluster(bin, folder, cluster, user, careless);
   await clearRemains(cluster);
