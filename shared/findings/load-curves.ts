@@ -59,6 +59,7 @@ export function loadCurves(document: CircuitDocument, caseId: string, circuit: S
   const facts = motor === null ? null : motorFacts(base.plate(motor), base.constants);
   const volts = motor === null ? 0 : lowestSupply(base, motor);
   const deadHead = plate.number('compensatorPressure');
+  const knee = kneePressure(deadHead, plate.number('band'), Math.min(1, plate.number('maxVolumeStop') / steady.displacement));
   const reliefs = reliefsOf(base, pump.id).map((relief) => ({
     component: relief.id,
     cracks: cracking(base, relief.id),
@@ -76,9 +77,9 @@ export function loadCurves(document: CircuitDocument, caseId: string, circuit: S
     rated: limit(facts ? facts.ratedTorque * facts.serviceFactor : null),
     trips: limit(relayTorque),
     pullOut: limit(facts ? facts.at(facts.pullOutSpeed, volts).torque : null),
-    pumpLine: facts ? pumpLine(steady, facts, volts, deadHead) : [],
+    pumpLine: facts ? pumpLine(steady, facts, volts, knee, deadHead) : [],
     deadHead,
-    knee: kneePressure(deadHead, plate.number('band'), Math.min(1, plate.number('maxVolumeStop') / steady.displacement)),
+    knee,
     relief,
     pressureAddress: `${pump.id}.outlet.pressure`,
     flowAddress: `${pump.id}.flow`,
@@ -123,8 +124,10 @@ function limitCurve(steady: SteadyPump, facts: MotorFacts, torque: number, volts
   return { pressure: Float64Array.from(pressures), flow: Float64Array.from(flows) };
 }
 
-/** The pump's own line on its motor. Broken where the torque asked is above pull-out: no steady state exists there. */
-function pumpLine(steady: SteadyPump, facts: MotorFacts, volts: number, deadHead: number): Curve[] {
+/** The pump's own line on its motor, down to zero flow. Broken where the torque asked is above pull-out: no steady state
+ *  exists there. Points stand closer where the compensator works. */
+function pumpLine(steady: SteadyPump, facts: MotorFacts, volts: number, knee: number, deadHead: number): Curve[] {
+  const start = Math.max(0, knee - 0.5 * (deadHead - knee));
   const pieces: Curve[] = [];
   let pressures: number[] = [];
   let flows: number[] = [];
@@ -134,15 +137,23 @@ function pumpLine(steady: SteadyPump, facts: MotorFacts, volts: number, deadHead
     flows = [];
   };
   for (let i = 0; i <= 2 * POINTS; i++) {
-    const pressure = (deadHead * 1.01 * i) / (2 * POINTS);
-    const point = steadyPoint(steady, facts, volts, pressure);
-    if (point === null) {
+    const pressure = i < POINTS ? (start * i) / POINTS : start + ((1.02 * deadHead - start) * (i - POINTS)) / POINTS;
+    const flow = steadyPoint(steady, facts, volts, pressure);
+    if (flow === null) {
       close();
       continue;
     }
-    if (point < 0) break;
+    const last = flows[flows.length - 1];
+    if (flow < 0) {
+      const before = pressures[pressures.length - 1];
+      if (last !== undefined && before !== undefined) {
+        pressures.push(before + ((pressure - before) * last) / (last - flow));
+        flows.push(0);
+      }
+      break;
+    }
     pressures.push(pressure);
-    flows.push(point);
+    flows.push(flow);
   }
   close();
   return pieces;
@@ -152,7 +163,7 @@ function pumpLine(steady: SteadyPump, facts: MotorFacts, volts: number, deadHead
 function steadyPoint(steady: SteadyPump, facts: MotorFacts, volts: number, pressure: number): number | null {
   const stroke = steady.stroke(pressure);
   let speed = facts.ratedSpeed;
-  for (let i = 0; i < 4; i++) {
+  for (let i = 0; i < 2; i++) {
     const found = facts.speedAt(steady.torque(stroke, pressure, speed), volts);
     if (found === null) return null;
     speed = found;

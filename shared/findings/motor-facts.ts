@@ -23,7 +23,9 @@ export interface MotorFacts {
   readonly relay: { readonly k: number; readonly dial: number; readonly tau: number } | null;
 }
 
-const HALVINGS = 60;
+const MOST_STEPS = 60;
+/** Speeds this close are the same [rad/s]. */
+const CLOSE = 1e-9;
 
 export function motorFacts(plate: Plate, constants: RunConstants): MotorFacts {
   const c = prepareMotor(plate, constants);
@@ -66,17 +68,22 @@ export function motorFacts(plate: Plate, constants: RunConstants): MotorFacts {
   };
   const rest = point(0, constants.supplyVoltage);
   const { pullOutSpeed, synchronous } = rest;
-  /** Speed between pull-out and synchronous where a falling quantity passes a level. */
-  const solve = (level: number, quantity: (speed: number) => number): number | null => {
-    if (quantity(pullOutSpeed) < level) return null;
+  /** Speed between pull-out and synchronous where a falling quantity passes a level: Newton, kept inside by halving. */
+  const solve = (level: number, volts: number, of: 'shaft' | 'current', slopeOf: 'shaftSlope' | 'currentSlope'): number | null => {
     let low = pullOutSpeed;
     let high = synchronous;
-    for (let i = 0; i < HALVINGS; i++) {
-      const middle = (low + high) / 2;
-      if (quantity(middle) >= level) low = middle;
-      else high = middle;
+    if (point(low, volts)[of] < level) return null;
+    let speed = low + 0.7 * (high - low);
+    for (let i = 0; i < MOST_STEPS && high - low > CLOSE; i++) {
+      const here = point(speed, volts);
+      const excess = here[of] - level;
+      if (Math.abs(excess) <= 1e-10 * Math.abs(level)) break;
+      if (excess > 0) low = speed;
+      else high = speed;
+      const next = speed - excess / here[slopeOf];
+      speed = next > low && next < high ? next : (low + high) / 2;
     }
-    return (low + high) / 2;
+    return speed;
   };
   return {
     ratedPower: plate.number('ratedPower'),
@@ -89,9 +96,9 @@ export function motorFacts(plate: Plate, constants: RunConstants): MotorFacts {
     pullOutSpeed,
     pullOutTorqueAt: (volts) => point(pullOutSpeed, volts).pullOutTorque,
     at,
-    speedAt: (torque, volts) => solve(torque, (speed) => at(speed, volts).torque),
+    speedAt: (torque, volts) => solve(torque, volts, 'shaft', 'shaftSlope'),
     torqueAtCurrent: (current, volts) => {
-      const speed = solve(current, (middle) => at(middle, volts).current);
+      const speed = solve(current, volts, 'current', 'currentSlope');
       return speed === null ? null : at(speed, volts).torque;
     },
     relay: c.relayFitted > 0 ? { k: c.relayFactor, dial: plate.number('relayDial'), tau: c.relayTime } : null,
