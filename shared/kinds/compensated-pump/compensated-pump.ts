@@ -8,7 +8,7 @@ import { pumpReadings } from './readings.ts';
 
 const C = indices(pumpCoefficients);
 /** Reverse speed from which running backwards is logged [rad/s]. */
-const BACKWARDS = 1;
+const BACKWARDS = 5;
 
 function prepare(plate: Plate, run: RunConstants): Record<(typeof pumpCoefficients)[number], number> {
   const displacement = plate.number('displacement');
@@ -90,7 +90,7 @@ export const compensatedPump = defineKind({
     },
     {
       id: 'backwards',
-      rises: 'load drives the pump backwards',
+      rises: 'pump runs backwards',
       falls: 'pump no longer runs backwards',
       value: (block, i, w) => -portValue(block, i, SHAFT, w) - BACKWARDS,
     },

@@ -1,8 +1,8 @@
-import { orifice, orificeSlope, smoothMax, smoothMaxSlope, smoothMin, smoothMinSlope } from '../../numerics/smooth.ts';
+import { orifice, orificeSlope, smoothMax, smoothMaxSlope, smoothMinSlope } from '../../numerics/smooth.ts';
 import { indices } from '../build.ts';
 import type { Block, Workspace } from '../kind.ts';
 import { Memo } from '../memo.ts';
-import { LAMINAR, LIFT_ROUNDING, REST_ROUNDING, reliefCoefficient, wantedLift } from './laws.ts';
+import { LAMINAR, LIFT_ROUNDING, reliefCoefficient, wantedLift } from './laws.ts';
 
 /** cracking = crackShare·setting + crackFixed, and so on: a raw value fills the fixed part, the plate the share. */
 export const reliefCoefficients = ['crackShare', 'crackFixed', 'fullShare', 'fullFixed', 'reseat', 'lag', 'setFlow', 'k'] as const;
@@ -68,11 +68,12 @@ export function evaluateRelief(block: Block, i: number, w: Workspace): ReliefPoi
   const lag = c[b + C.lag]!;
   const up = openingLift - lift;
   const down = closingLift - lift;
-  const upSlope = smoothMaxSlope(up, 0, REST_ROUNDING);
-  const downSlope = smoothMinSlope(down, 0, REST_ROUNDING);
-  point.rate = (smoothMax(up, 0, REST_ROUNDING) + smoothMin(down, 0, REST_ROUNDING)) / lag;
-  point.rateByDifference = (upSlope * openingSlope + downSlope * closingSlope) / lag;
-  point.rateByLift = -(upSlope + downSlope) / lag;
+  // Above the opening line it lifts, below the closing line it falls, between them friction holds it where it is.
+  const lifts = up > 0 ? 1 : 0;
+  const falls = down < 0 ? 1 : 0;
+  point.rate = (lifts * up + falls * down) / lag;
+  point.rateByDifference = (lifts * openingSlope + falls * closingSlope) / lag;
+  point.rateByLift = -(lifts + falls) / lag;
 
   const passing = (1 - shut) * (1 - open);
   const effective = lift * passing + open;

@@ -2,10 +2,9 @@ import { orifice, smoothMax, smoothMin } from '../../numerics/smooth.ts';
 
 /** Laws of the relief valve as plain functions; the kernel and the checks call them. SI throughout. */
 
-/** Half width of the laminar zone [Pa], rounding of the wanted lift, rounding of the rest between opening and closing. */
+/** Half width of the laminar zone [Pa], rounding of the wanted lift. */
 export const LAMINAR = 1e5;
 export const LIFT_ROUNDING = 0.01;
-export const REST_ROUNDING = 0.005;
 
 /** Cracking pressure of a valve set at `set` with an override (set − cracking)/cracking: set/(1 + override). */
 export function crackingPressure(set: number, override: number): number {
