@@ -117,12 +117,7 @@ export function shapesMarkup(shapes: readonly Shape[], style: MarkupStyle): stri
 /** One SVG file. Words keep their font names; where the fonts are missing the reader's own sans serif is used. */
 export function pictureToSvg(picture: Picture, theme: ThemeName, options: SvgOptions = {}): string {
   const scale = options.scale ?? 1;
-  const context: Context = {
-    theme,
-    turn: 0,
-    mirror: false,
-    textures: new Map(),
-  };
+  const context: Context = { colour: (ink) => inkColour(ink, theme), turn: 0, mirror: false, textScale: 1, textures: new Map() };
   const body = picture.shapes.map((shape) => element(shape, context)).join('\n');
   const ground =
     options.ground === undefined

@@ -110,6 +110,13 @@ export const compensatedPumpSymbol: SymbolDefinition = {
     'reading.flow': { x: 15, y: -1.2 },
   },
   code: { x: 13, y: 8.8 },
+  bodies: () => [
+    { x: 4, y: 3, w: 8, h: 8 },
+    { x: 0.4, y: -0.1, w: 7.8, h: 3.2 },
+    { x: 2.3, y: 9.6, w: 2.5, h: 2.3 },
+    { x: 11, y: 2.6, w: 1.7, h: 2 },
+    { x: 11.5, y: 9.6, w: 2, h: 2.4 },
+  ],
   still,
   moving,
 };

@@ -188,6 +188,10 @@ export const cylinderSymbol: SymbolDefinition = {
   },
   code: { x: 0.8, y: -0.7 },
   reach,
-  still: () => [box(0, 0, BARREL, 6), letter(3.3, 7.7, 'A'), letter(16.7, 7.7, 'B')],
+  bodies: (values) => [
+    { x: 0, y: 0, w: BARREL, h: 6 },
+    { x: BARREL, y: -reach(values).top, w: reach(values).right, h: 6 + 2 * reach(values).top },
+  ],
+  still: () => [box(0, 0, BARREL, 6), letter(0.75, 7.5, 'A'), letter(19.3, 7.5, 'B')],
   moving,
 };

@@ -31,6 +31,10 @@ export const directionalValve42Symbol: SymbolDefinition = {
   anchors: { spool: { x: 9, y: 4 }, 'reading.words': { x: 18.5, y: 2.4 } },
   code: { x: 13, y: 5.6 },
   reach: () => ({ left: 1.5, right: 4, top: 0.5, bottom: 0.5 }),
+  bodies: () => [
+    { x: -1.5, y: 0, w: 19, h: 4 },
+    { x: 6, y: -1.7, w: 6.2, h: 7.4 },
+  ],
   still: () => portLetters(8, 10),
   moving,
 };

@@ -43,6 +43,10 @@ export const directionalValve43Symbol: SymbolDefinition = {
   anchors: { spool: { x: 9, y: 4 }, 'reading.words': { x: 20.5, y: 2.4 } },
   code: { x: 13.6, y: 5.6 },
   reach: () => ({ left: 5.5, right: 5.5, top: 0.5, bottom: 0.5 }),
+  bodies: () => [
+    { x: -5.5, y: 0, w: 29, h: 4 },
+    { x: 6, y: -1.7, w: 6.2, h: 7.4 },
+  ],
   still: () => portLetters(8, 10),
   moving,
 };

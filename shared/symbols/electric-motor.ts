@@ -32,7 +32,9 @@ function moving(state: SymbolState): readonly Shape[] {
     shapes.push(arc(4, 4, RING, ringAngle(0), ringAngle(load), 0.1, 'sheet'));
   }
   shapes.push(mark(1, 'ink', 0.18));
-  const pullOut = num(state.values, 'pullOut', 0);
+  // Pull-out torque at the present voltage over rated torque (rated power over rated speed).
+  const rated = num(state.values, 'ratedPower', 0) / num(state.values, 'ratedSpeed', Number.POSITIVE_INFINITY);
+  const pullOut = rated > 0 ? (state.readings.pullOutTorque ?? 0) / rated : 0;
   if (pullOut > 0) shapes.push(mark(pullOut, 'verdict-motor-stalls', 0.28));
   return shapes;
 }

@@ -21,6 +21,10 @@ export const filterSymbol: SymbolDefinition = {
   },
   anchors: { 'reading.drop': { x: 4, y: 7.6 } },
   code: { x: 1.6, y: 6.6 },
+  bodies: () => [
+    { x: 1.8, y: 1.8, w: 4.4, h: 4.4 },
+    { x: 0.4, y: 0.2, w: 7.2, h: 2 },
+  ],
   still: () => [
     {
       type: 'polyline',

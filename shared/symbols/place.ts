@@ -117,3 +117,23 @@ export function placedGroup(size: Size, place: Placement, shapes: readonly Shape
     role,
   };
 }
+
+/** What a symbol really covers on the drawing, for tags and words that must not lie on it. */
+export function bodyBoxes(symbol: SymbolDefinition, place: Placement, values: Readonly<Record<string, number | string>>): readonly Box[] {
+  if (!symbol.bodies) return [sweptBox(symbol, place, values)];
+  return symbol.bodies(values).map((box) => {
+    const a = placePoint(symbol, place, { x: box.x, y: box.y });
+    const b = placePoint(symbol, place, { x: box.x + box.w, y: box.y + box.h });
+    return { x: Math.min(a.x, b.x), y: Math.min(a.y, b.y), w: Math.abs(a.x - b.x), h: Math.abs(a.y - b.y) };
+  });
+}
+
+/** Smallest box around boxes; null for none. */
+export function unionBox(boxes: readonly Box[]): Box | null {
+  if (boxes.length === 0) return null;
+  const x = Math.min(...boxes.map((box) => box.x));
+  const y = Math.min(...boxes.map((box) => box.y));
+  const right = Math.max(...boxes.map((box) => box.x + box.w));
+  const bottom = Math.max(...boxes.map((box) => box.y + box.h));
+  return { x, y, w: right - x, h: bottom - y };
+}

@@ -35,6 +35,7 @@ export const pressureGaugeSymbol: SymbolDefinition = {
   ports: { M: { x: X, y: 6, side: 'bottom', stub: [X, Y + 2.2] } },
   anchors: { 'reading.pressure': { x: 8.8, y: 2.4 } },
   code: { x: 0.3, y: 5.4 },
+  bodies: () => [{ x: 0.8, y: 0.2, w: 4.4, h: 4.4 }],
   still: () => [circle(X, Y, 2.2), letter(X + 1.6, 5.6, 'M')],
   moving,
 };

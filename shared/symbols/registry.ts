@@ -1,3 +1,4 @@
+import type { KindId } from '../kinds/registry.ts';
 import { checkValveSymbol } from './check-valve.ts';
 import { compensatedPumpSymbol } from './compensated-pump.ts';
 import { cylinderSymbol } from './cylinder.ts';
@@ -28,7 +29,7 @@ export const symbols = {
   tank: tankSymbol,
   'pressure-gauge': pressureGaugeSymbol,
   'flow-meter': flowMeterSymbol,
-} satisfies Record<string, SymbolDefinition>;
+} satisfies Record<KindId, SymbolDefinition>;
 
 /** The symbol of a kind, or undefined for a kind that does not exist. */
 export function symbolOf(kind: string): SymbolDefinition | undefined {

@@ -47,6 +47,10 @@ export interface SymbolDefinition {
   readonly code: { readonly x: number; readonly y: number };
   /** Swept room beside the box, for tags and routes. */
   readonly reach?: (values: Readonly<Record<string, number | string>>) => Reach;
+  /** What the symbol really covers, as boxes, with everything that may move out; absent = box and reach. Tags may stand between them. */
+  readonly bodies?: (
+    values: Readonly<Record<string, number | string>>,
+  ) => readonly { readonly x: number; readonly y: number; readonly w: number; readonly h: number }[];
   /** Strokes that never change. */
   readonly still: (values: Readonly<Record<string, number | string>>) => readonly Shape[];
   /** Parts that move with readings (spool, rod, needle, ring); drawn above `still`. */

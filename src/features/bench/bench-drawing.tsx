@@ -1,0 +1,236 @@
+import { useCallback, useEffect, useMemo, useRef, useState } from 'react';
+import {
+  Background,
+  BackgroundVariant,
+  type Node,
+  type NodeChange,
+  ReactFlow,
+  ReactFlowProvider,
+  useReactFlow,
+  type Viewport,
+} from 'reactflow';
+import { setTagPlace } from '#shared/circuit/edit/sheet.ts';
+import { useFormat } from '#src/components/use-format.ts';
+import { type Layout, useLayout, useTouch } from '#src/lib/layout.ts';
+import { useSize } from '#src/lib/use-size.ts';
+import { useDocument } from '#src/stores/document-store.ts';
+import { openNameplate } from '#src/stores/nameplate-store.ts';
+import { benchNodeTypes } from './bench-nodes.tsx';
+import { FlowList, SpokenList } from './flow-list.tsx';
+import { InkKey, KEY_HEIGHT, KEY_WIDTH } from './ink-key.tsx';
+import { LineReading } from './line-reading.tsx';
+import { TurnWheel, WHEEL_HEIGHT, WHEEL_WIDTH } from './turn-wheel.tsx';
+import { type BenchLayout, useBenchLayout } from './use-bench-layout.ts';
+import { ZoomButtons } from './zoom-buttons.tsx';
+import './bench.css';
+
+export interface BenchDrawingProps {
+  /** Opens a nameplate: component or line id. Double click, long press or Enter. */
+  readonly onOpen?: (id: string) => void;
+}
+
+/** The drawing of the bench: the circuit, live at the cursor, with its screw tags. Structure is changed on the Draw stage. */
+export function BenchDrawing({ onOpen = openNameplate }: BenchDrawingProps) {
+  return (
+    <ReactFlowProvider>
+      <Drawing onOpen={onOpen} />
+    </ReactFlowProvider>
+  );
+}
+
+function Drawing({ onOpen }: Required<BenchDrawingProps>) {
+  const layout = useLayout();
+  const touch = useTouch() || layout === 'phone';
+  const phone = layout === 'phone';
+  const document = useDocument((state) => state.document);
+  const activeCase = useDocument((state) => state.activeCase);
+  const inHand = useDocument((state) => state.inHand);
+  const [ref, size] = useSize<HTMLDivElement>();
+  const [zoom, setZoom] = useState<number | null>(null);
+  const wheelBeside = inHand !== null && !phone && (touch || layout !== 'desk');
+  const bench = useBenchLayout(document, activeCase, {
+    width: size.width,
+    height: size.height,
+    zoom,
+    touch,
+    inHand,
+    key: phone ? null : { width: KEY_WIDTH + 26, height: KEY_HEIGHT + 14 },
+    wheel: wheelBeside ? { width: WHEEL_WIDTH + 24, height: WHEEL_HEIGHT + 20 } : null,
+    buttons: buttonRoom(layout, touch),
+  });
+  const wheelBelow = inHand !== null && (phone || (wheelBeside && bench.wheelCorner === null));
+  const tag = bench.tags.find((entry) => entry.spec.address === inHand);
+  return (
+    <div className="bench-drawing" data-layout={layout} data-below={wheelBelow || undefined}>
+      {phone && <LineReading />}
+      <div ref={ref} className="bench-flow">
+        <Flow bench={bench} width={size.width} height={size.height} zoom={zoom} touch={touch} onZoom={setZoom} onOpen={onOpen} />
+        {!phone && (
+          <div className={`bench-panel bench-panel-${bench.keyCorner ?? 'top-left'}`}>
+            <InkKey />
+          </div>
+        )}
+        {tag && wheelBeside && bench.wheelCorner && (
+          <div className={`bench-panel bench-panel-${bench.wheelCorner}`}>
+            <TurnWheel spec={tag.spec} state={tag.state} />
+          </div>
+        )}
+        {document.components.length === 0 && (
+          <p className="bench-empty">Nothing is drawn yet. The Draw stage begins with a pump and a motor.</p>
+        )}
+      </div>
+      {tag && wheelBelow && <TurnWheel spec={tag.spec} state={tag.state} wide />}
+      {phone ? <FlowList tags={bench.tags} onOpen={onOpen} /> : <SpokenList tags={bench.tags} />}
+    </div>
+  );
+}
+
+function buttonRoom(layout: Layout, touch: boolean): { width: number; height: number } {
+  return touch || layout === 'phone' ? { width: 196, height: 66 } : { width: 142, height: 48 };
+}
+
+interface FlowProps {
+  readonly bench: BenchLayout;
+  readonly width: number;
+  readonly height: number;
+  readonly zoom: number | null;
+  readonly touch: boolean;
+  readonly onZoom: (zoom: number | null) => void;
+  readonly onOpen: (id: string) => void;
+}
+
+function Flow({ bench, width, height, zoom, touch, onZoom, onOpen }: FlowProps) {
+  const document = useDocument((state) => state.document);
+  const activeCase = useDocument((state) => state.activeCase);
+  const inHand = useDocument((state) => state.inHand);
+  const format = useFormat();
+  const flow = useReactFlow();
+  const [moving, setMoving] = useState<{ id: string; x: number; y: number } | null>(null);
+  const { fit, grow, routes, small, tags, readings, ink } = bench;
+
+  const fitted = zoom === null;
+  useEffect(() => {
+    if (!fitted || width === 0) return;
+    flow.setViewport({ zoom: fit.zoom, x: -fit.left * 10 * fit.zoom, y: -fit.top * 10 * fit.zoom });
+  }, [flow, fitted, fit.zoom, fit.left, fit.top, width]);
+
+  const opened = useRef(onOpen);
+  opened.current = onOpen;
+  const open = useCallback((id: string) => opened.current(id), []);
+
+  const nodes = useMemo((): Node[] => {
+    const fixed = { draggable: false, selectable: false, connectable: false, focusable: false };
+    const at = (id: string, x: number, y: number) => (moving?.id === id ? { x: moving.x, y: moving.y } : { x: x * 10, y: y * 10 });
+    const places = tags.map(({ place }) => {
+      if (moving?.id !== `tag ${place.address}`) return place;
+      const box = { ...place.box, x: moving.x / 10, y: moving.y / 10 };
+      const from = { x: place.string.from.x + box.x - place.box.x, y: place.string.from.y + box.y - place.box.y };
+      return { ...place, box, string: { ...place.string, from } };
+    });
+    return [
+      {
+        id: 'sheet',
+        type: 'sheet',
+        position: { x: 0, y: 0 },
+        zIndex: 0,
+        ...fixed,
+        data: { document, caseId: activeCase, routes, textScale: small ? 0 : Math.max(1, grow), onOpen: open },
+      },
+      { id: 'strings', type: 'strings', position: { x: 0, y: 0 }, zIndex: 1, ...fixed, data: { places, grow, inHand } },
+      ...readings.map(({ spec, box }) => ({
+        id: `reading ${spec.id}`,
+        type: 'reading',
+        position: { x: box.x * 10, y: box.y * 10 },
+        zIndex: 2,
+        ...fixed,
+        data: { spec, grow },
+      })),
+      ...tags.map(({ spec, state, place }) => ({
+        id: `tag ${spec.address}`,
+        type: 'tag',
+        position: at(`tag ${spec.address}`, place.box.x, place.box.y),
+        zIndex: inHand === spec.address ? 9 : 3,
+        selectable: false,
+        connectable: false,
+        focusable: false,
+        draggable: true,
+        data: {
+          spec,
+          state,
+          form: place.form,
+          eyelet: place.eyelet,
+          ink,
+          inHand: inHand === spec.address,
+          touch,
+          onOpen: open,
+          grow,
+          chipText: format.quantity(state.value, spec.quantity).value,
+        },
+      })),
+    ];
+  }, [document, activeCase, routes, small, grow, readings, tags, inHand, ink, touch, open, format, moving]);
+
+  function follow(changes: NodeChange[]) {
+    for (const change of changes) {
+      if (change.type === 'position' && change.position && change.dragging) setMoving({ id: change.id, ...change.position });
+    }
+  }
+  function drop() {
+    if (!moving) return;
+    const entry = tags.find(({ spec }) => `tag ${spec.address}` === moving.id);
+    setMoving(null);
+    if (!entry) return;
+    const { box, string, address } = entry.place;
+    const dx = Math.round((moving.x / 10 + box.w / 2 - string.to.x) * 4) / 4;
+    const dy = Math.round((moving.y / 10 + box.h / 2 - string.to.y) * 4) / 4;
+    useDocument
+      .getState()
+      .edit((current) => setTagPlace(current, address, { dx, dy, pinned: current.tagPlaces[address]?.pinned ?? false }));
+  }
+  function moved(event: MouseEvent | TouchEvent | null, viewport: Viewport) {
+    if (event) onZoom(viewport.zoom);
+  }
+  function zoomBy(factor: number) {
+    const { x, y, zoom: now } = flow.getViewport();
+    const next = Math.min(3, Math.max(0.15, now * factor));
+    const cx = width / 2;
+    const cy = height / 2;
+    flow.setViewport({ zoom: next, x: cx - ((cx - x) * next) / now, y: cy - ((cy - y) * next) / now });
+    onZoom(next);
+  }
+
+  return (
+    <>
+      <ReactFlow
+        nodes={nodes}
+        edges={noEdges}
+        nodeTypes={benchNodeTypes}
+        onNodesChange={follow}
+        onNodeDragStop={drop}
+        onMoveEnd={moved}
+        onPaneClick={() => useDocument.getState().takeInHand(null)}
+        minZoom={0.15}
+        maxZoom={3}
+        nodesConnectable={false}
+        nodesFocusable={false}
+        edgesFocusable={false}
+        elementsSelectable={false}
+        selectNodesOnDrag={false}
+        zoomOnDoubleClick={false}
+        deleteKeyCode={null}
+        selectionKeyCode={null}
+        multiSelectionKeyCode={null}
+        panActivationKeyCode={null}
+        disableKeyboardA11y
+        proOptions={hideCredit}
+        aria-label="The circuit"
+      >
+        <Background variant={BackgroundVariant.Dots} gap={50} size={2.2} offset={1} />
+      </ReactFlow>
+      <ZoomButtons fitted={zoom === null} onZoom={zoomBy} onFit={() => onZoom(null)} touch={touch} />
+    </>
+  );
+}
+
+const noEdges: never[] = [];
+const hideCredit = { hideAttribution: true };

@@ -1,0 +1,110 @@
+import { memo, useMemo, useRef } from 'react';
+import type { CircuitDocument } from '#shared/circuit/schema.ts';
+import { FILLET } from '#shared/pictures/pressure-ink.ts';
+import type { RoutedLine } from '#shared/pictures/route.ts';
+import { filletPath } from '#shared/pictures/route-path.ts';
+import { symbolValues } from '#shared/pictures/symbol-values.ts';
+import { placePoint } from '#shared/symbols/place.ts';
+import { symbolOf } from '#shared/symbols/registry.ts';
+import { LineView } from '#src/components/schematic/line-view.tsx';
+import { ShaftsView } from '#src/components/schematic/shaft-view.tsx';
+import { SymbolView } from '#src/components/schematic/symbol-view.tsx';
+import { useJoinedPorts } from '#src/components/schematic/use-routes.ts';
+
+export interface SheetViewProps {
+  readonly document: CircuitDocument;
+  readonly caseId: string;
+  readonly routes: ReadonlyMap<string, RoutedLine>;
+  /** Factor for small words; 0 leaves them out. */
+  readonly textScale: number;
+  readonly onOpen: (id: string) => void;
+}
+
+/** Hold before a long press counts [ms]. */
+const LONG_PRESS = 550;
+
+/** Shafts, lines and symbols, live. The same sheet that is printed, ten pixels a module. */
+export const SheetView = memo(function SheetView({ document, caseId, routes, textScale, onOpen }: SheetViewProps) {
+  const joined = useJoinedPorts(document);
+  const values = useSteadyValues(document, caseId);
+  const press = useRef<ReturnType<typeof setTimeout> | undefined>(undefined);
+  const opening = (id: string) => ({
+    onDoubleClick: (event: { stopPropagation: () => void }) => {
+      event.stopPropagation();
+      onOpen(id);
+    },
+    onPointerDown: (event: { pointerType: string }) => {
+      if (event.pointerType === 'mouse') return;
+      clearTimeout(press.current);
+      press.current = setTimeout(() => onOpen(id), LONG_PRESS);
+    },
+    onPointerUp: () => clearTimeout(press.current),
+    onPointerMove: (event: { movementX: number; movementY: number }) => {
+      if (Math.abs(event.movementX) + Math.abs(event.movementY) > 3) clearTimeout(press.current);
+    },
+    onPointerCancel: () => clearTimeout(press.current),
+  });
+  return (
+    <svg className="bench-sheet" width="1" height="1" overflow="visible" aria-hidden="true">
+      <g transform="scale(10)">
+        <ShaftsView components={document.components} shafts={document.shafts} />
+        {document.lines.map((line) => {
+          const route = routes.get(line.id);
+          if (!route) return null;
+          return (
+            <g key={line.id} {...opening(line.id)}>
+              <path d={filletPath(route.points, FILLET)} className="line-hit" />
+              <LineView line={line} route={route} live />
+            </g>
+          );
+        })}
+        {document.components.map((component) => (
+          <g
+            key={component.id}
+            transform={`translate(${component.at.x} ${component.at.y})`}
+            data-component={component.id}
+            {...opening(component.id)}
+          >
+            <SymbolView component={component} values={values(component.id)} joined={joined(component.id)} live textScale={textScale} />
+          </g>
+        ))}
+        {textScale > 0 && document.components.map((component) => <Code key={component.id} component={component} textScale={textScale} />)}
+      </g>
+    </svg>
+  );
+});
+
+const Code = memo(function Code({
+  component,
+  textScale,
+}: {
+  readonly component: CircuitDocument['components'][number];
+  readonly textScale: number;
+}) {
+  const symbol = symbolOf(component.kind);
+  if (!symbol || component.kind === 'junction' || component.kind === 'tank') return null;
+  const at = placePoint(symbol, component, symbol.code);
+  return (
+    <text x={at.x} y={at.y} className="item-code" fontSize={1.2 * textScale} textAnchor="middle">
+      {component.name}
+    </text>
+  );
+});
+
+const nothing: Readonly<Record<string, number | string>> = {};
+
+/** Effective values by component; the same object while nothing in it changed, so that a turned screw redraws one symbol. */
+function useSteadyValues(document: CircuitDocument, caseId: string): (id: string) => Readonly<Record<string, number | string>> {
+  const kept = useRef(new Map<string, { text: string; values: Readonly<Record<string, number | string>> }>());
+  return useMemo(() => {
+    const next = new Map<string, { text: string; values: Readonly<Record<string, number | string>> }>();
+    for (const component of document.components) {
+      const values = symbolValues(document, caseId, component);
+      const text = JSON.stringify(values);
+      const before = kept.current.get(component.id);
+      next.set(component.id, before?.text === text ? before : { text, values });
+    }
+    kept.current = next;
+    return (id: string) => next.get(id)?.values ?? nothing;
+  }, [document, caseId]);
+}

@@ -1,0 +1,130 @@
+import { useMemo, useRef } from 'react';
+import { findCase } from '#shared/circuit/effective.ts';
+import type { CircuitDocument } from '#shared/circuit/schema.ts';
+import type { RoutedLine } from '#shared/pictures/route.ts';
+import type { TagForm, TagPlace } from '#shared/pictures/tag-slots.ts';
+import type { Box } from '#shared/symbols/place.ts';
+import { useRoutes } from '#src/components/schematic/use-routes.ts';
+import { useFormat } from '#src/components/use-format.ts';
+import { type Corner, chooseFit } from './bench-fit.ts';
+import { bodiesOf, growth, legsOf, placeReadings, seatTags, type View, visibleBox } from './bench-layout.ts';
+import { keepPlaces } from './bench-places.ts';
+import { type ReadingSpec, readingSpecs } from './reading-specs.ts';
+import { type TagSpec, tagSpecs } from './tag-specs.ts';
+import { isFull, type TagState, tagState } from './tag-state.ts';
+
+export interface BenchLayout {
+  readonly routes: ReadonlyMap<string, RoutedLine>;
+  readonly fit: View;
+  /** Where the key of the pressure ink stands; null = no room beside the drawing. */
+  readonly keyCorner: Corner | null;
+  readonly wheelCorner: Corner | null;
+  readonly grow: number;
+  readonly small: boolean;
+  readonly readings: readonly { readonly spec: ReadingSpec; readonly box: Box }[];
+  readonly tags: readonly { readonly spec: TagSpec; readonly state: TagState; readonly place: TagPlace }[];
+  readonly ink: number;
+}
+
+export interface LayoutOptions {
+  readonly width: number;
+  readonly height: number;
+  /** Zoom after the person moved the view; null = everything fitted in. */
+  readonly zoom: number | null;
+  readonly touch: boolean;
+  readonly inHand: string | null;
+  /** Pixels of the key, of the turn wheel (while shown) and of the zoom buttons. */
+  readonly key: { readonly width: number; readonly height: number } | null;
+  readonly wheel: { readonly width: number; readonly height: number } | null;
+  readonly buttons: { readonly width: number; readonly height: number };
+}
+
+/** Below this zoom tags are value chips, and readings move into the list. */
+export const CHIP_ZOOM = 0.6;
+export function useBenchLayout(document: CircuitDocument, caseId: string, options: LayoutOptions): BenchLayout {
+  const { width, height, zoom, touch, inHand, key, wheel, buttons } = options;
+  const format = useFormat();
+  const routes = useRoutes(document);
+  const { components, lines, shafts } = document;
+
+  const specs = useMemo(() => tagSpecs({ ...document, components, lines, shafts }), [document, components, lines, shafts]);
+  // Routes are laid anew exactly when something on the sheet moves.
+  const sheet = useMemo(() => {
+    const bodies = bodiesOf(document, caseId, routes);
+    return { bodies, legs: legsOf(routes), readings: readingSpecs(document) };
+    // Not on every document: a value that changes nothing on the sheet must not move tags.
+  }, [routes, caseId]);
+
+  // The view is chosen when the sheet or its region changes, never while a screw is turned.
+  const fit = useMemo(() => {
+    const { bodies, legs, readings } = sheet;
+    const wishes = specs.flatMap((spec) => {
+      const state = tagState(document, caseId, spec);
+      const chipText = state ? format.quantity(state.value, spec.quantity).value : '';
+      return state
+        ? [{ spec, form: isFull(document, spec, null) ? ('full' as const) : ('compact' as const), chipText, inHand: false }]
+        : [];
+    });
+    return chooseFit({ document, bodies, legs, readings, wishes, size: { width, height }, touch, key, wheel, buttons });
+    // The panels are compared by their sizes.
+  }, [sheet, width, height, touch, key?.width, key?.height, wheel?.width, wheel?.height, buttons.width, buttons.height]);
+
+  const seen = zoom ?? fit.view.zoom;
+  const grow = growth(seen);
+  const small = seen < CHIP_ZOOM;
+  const frame = useMemo(() => (zoom === null && width > 0 ? visibleBox(fit.view, width, height) : undefined), [zoom, fit, width, height]);
+  const blocked = useMemo(() => (zoom === null ? fit.blocked : []), [zoom, fit]);
+
+  const readings = useMemo(() => {
+    if (small) return new Map<string, Box>();
+    return placeReadings(sheet.readings, sheet.bodies, sheet.legs, grow, blocked, frame);
+  }, [sheet, grow, small, blocked, frame]);
+
+  const states = useMemo(() => {
+    const found: { spec: TagSpec; state: TagState; form: TagForm; chip: string }[] = [];
+    for (const spec of specs) {
+      const state = tagState(document, caseId, spec);
+      if (!state) continue;
+      const form: TagForm = small ? 'chip' : isFull(document, spec, inHand) ? 'full' : 'compact';
+      found.push({ spec, state, form, chip: format.quantity(state.value, spec.quantity).value });
+    }
+    return found;
+  }, [specs, document, caseId, inHand, small, format]);
+
+  const kept = useRef<{ text: string; sheet: unknown; readings: unknown; places: ReadonlyMap<string, TagPlace> } | null>(null);
+  const text = `${grow} ${touch} ${JSON.stringify(frame)} ${states
+    .map(({ spec, form, chip }) => {
+      const dragged = document.tagPlaces[spec.address];
+      return `${spec.address}:${form}:${form === 'chip' ? chip.length : ''}:${inHand === spec.address}:${dragged ? `${dragged.dx},${dragged.dy}` : ''}`;
+    })
+    .join(' ')}`;
+  const places = useMemo(() => {
+    const before = kept.current;
+    if (before && before.text === text && before.sheet === sheet && before.readings === readings) return before.places;
+    const steady = before && before.sheet === sheet ? before.places : null;
+    const wishes = states.map(({ spec, form, chip }) => ({ spec, form, chipText: chip, inHand: inHand === spec.address }));
+    const next = seatTags(wishes, document, sheet.bodies, sheet.legs, readings, { grow, touch, frame, blocked }, steady);
+    kept.current = { text, sheet, readings, places: next };
+    keepPlaces(next);
+    return next;
+    // `text` stands for all that decides where a tag stands.
+  }, [text, sheet, readings]);
+
+  return {
+    routes,
+    fit: fit.view,
+    keyCorner: fit.keyCorner,
+    wheelCorner: fit.wheelCorner,
+    grow,
+    small,
+    readings: sheet.readings.flatMap((spec) => {
+      const box = readings.get(spec.id);
+      return box ? [{ spec, box }] : [];
+    }),
+    tags: states.flatMap(({ spec, state }) => {
+      const place = places.get(spec.address);
+      return place ? [{ spec, state, place }] : [];
+    }),
+    ink: findCase(document, caseId)?.ink ?? 0,
+  };
+}
