@@ -6,6 +6,10 @@ import type { CircuitSystem } from './system.ts';
 /** Boole's rule on quarter points: weights over 90. */
 const WEIGHTS = [7, 32, 12, 32, 7] as const;
 
+/** Residuals of a run in which next to nothing moves are related to this work [J] and volume [m³]. */
+const LEAST_WORK = 1;
+const LEAST_MOVED = 1e-6;
+
 /** Energy and volume accounts of a run, by quadrature on the dense output and from each component's own law, independent of
  *  the node equations: work supplied, work delivered, heat (also by component), energy kept in components, oil compressed
  *  (∫ p·(V/K) dp per node), and what flowed into every node against what its oil took up (∫ (V/K) dp). */
@@ -138,8 +142,8 @@ export class Audit {
       delivered: total.delivered,
       heat,
       storedChange,
-      residual: total.supplied > 0 ? miss / total.supplied : miss,
-      volumeResidual: total.moved > 0 ? volumeMiss / total.moved : volumeMiss,
+      residual: miss / Math.max(total.supplied, LEAST_WORK),
+      volumeResidual: volumeMiss / Math.max(total.moved, LEAST_MOVED),
       heatBy,
     };
   }
