@@ -68,7 +68,7 @@ function yardstickLines(load: RunSummary['yardsticks'][number], nameOf: (id: str
   const stall = load.stalled && load.stallTime !== undefined ? `, stalls at ${seconds(load.stallTime)}` : '';
   const trip = load.tripTime === null ? 'does not trip' : `trips after ${quantity(load.tripTime, 'time')} of this duty, repeated`;
   const torque = `torque peak ${quantity(load.peakTorque, 'ratio')}, RMS ${quantity(load.rmsTorque, 'ratio')} rated`;
-  const current = `current peak ${quantity(load.peakCurrent, 'current')}, RMS ${quantity(load.rmsCurrent, 'ratio')} nameplate`;
+  const current = `current peak ${quantity(load.peakCurrent, 'ratio')}, RMS ${quantity(load.rmsCurrent, 'ratio')} nameplate`;
   return [`${nameOf(load.motor)}  stall margin ${margin}${stall}; ${torque}; ${current}; overload ${trip}`];
 }
 
@@ -86,7 +86,7 @@ function phaseLines(document: CircuitDocument, run: RunSummary): string[] {
     ...lanes.flatMap((lane) => {
       const range = phase.channels[lane.address];
       if (!range) return [];
-      const text = (value: number) => quantity(value, lane.quantity);
+      const text = (value: number) => formatQuantity(value, lane.quantity, units).text;
       return [
         `  ${lane.title.padEnd(width)}  least ${text(range.min)}, most ${text(range.max)}, mean ${text(range.mean)}, end ${text(range.end)}`,
       ];

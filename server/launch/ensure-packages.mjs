@@ -14,7 +14,7 @@ function wantedStamp() {
   return hash.update(`${process.versions.modules} ${process.platform} ${process.arch}`).digest('hex');
 }
 
-/** True when npm's own record of what it installed agrees with the lock (someone ran npm by hand). */
+/** True when npm's own record of what it installed holds everything in the lock (someone ran npm by hand). More does no harm. */
 function agreesWithLock() {
   if (!existsSync(installedLock)) return false;
   const wanted = JSON.parse(readFileSync(join(root, 'package-lock.json'), 'utf8')).packages;
@@ -23,7 +23,7 @@ function agreesWithLock() {
     if (path === '' || (entry.optional && !present[path])) return false;
     return present[path]?.version !== entry.version || present[path]?.integrity !== entry.integrity;
   });
-  return !missing && Object.keys(present).every((path) => path in wanted);
+  return !missing;
 }
 
 function checkNode() {

@@ -1,4 +1,5 @@
 import { spawn } from 'node:child_process';
+import { stripVTControlCharacters } from 'node:util';
 import { root } from './paths.mjs';
 import { Problem, systemSentence } from './problem.mjs';
 
@@ -49,7 +50,7 @@ export async function mustRun(file, args, { where = 'the project folder', doing,
 
 /** What a tool said, without colours and stacks: the last dozen lines. */
 function gist(output) {
-  const plain = output.replace(/\u001b\[[0-9;]*m/g, '').split('\n');
+  const plain = stripVTControlCharacters(output).split('\n');
   const lines = plain.map((line) => line.trimEnd()).filter((line) => line !== '' && !/^\s+at /.test(line));
   return lines.slice(-12).join('\n');
 }
