@@ -216,3 +216,10 @@ function notANumber(label: string, entry: string): RefusedQuantity {
     message: `${label}: "${shown}" is not a number; type digits with one decimal sign, and a unit if you like.`,
   };
 }
+
+/** What was typed, ready to print: a unit written by its id or an alias is printed by its symbol ("16 cm3/rev" → "16 cm³/rev"). */
+export function typedText(typed: string, quantity: QuantityId): string {
+  const match = /^(.*?[\d½¼¾.,])\s*([^\d\s].*)$/u.exec(typed.trim());
+  const unit = match && findUnit(quantityOf(quantity), (match[2] as string).trim());
+  return unit ? joined(match[1] as string, unit.symbol).replace(/\u202f/g, ' ') : typed;
+}

@@ -1,11 +1,15 @@
 import { checkDocument } from '#shared/circuit/check-document.ts';
 import { demoCircuit } from '#shared/circuit/samples/demo.ts';
 import { type Draft, holdDraft, readDraft, writeDraft, writeLastMoment } from '#src/lib/draft.ts';
+import { useCursor } from '#src/stores/cursor-store.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { useKeeping } from '#src/stores/keeping-store.ts';
 
 /** An edit is on the device this long after it, at the latest. */
 const DELAY = 150;
+
+/** Where the cursor stands when the demo opens [s]: the rod is closing on the bale. */
+const DEMO_MOMENT = 3.34;
 
 /** Opens the demo as the first visit does: case B on the drawing, A overlaid. */
 export function openDemo(): void {
@@ -15,6 +19,7 @@ export function openDemo(): void {
   if (!first || !second) return;
   setActiveCase(second.id);
   toggleOverlay(first.id);
+  useCursor.getState().setTime(DEMO_MOMENT);
 }
 
 function restore(draft: Draft): boolean {

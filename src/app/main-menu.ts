@@ -4,7 +4,7 @@ import { showDialog } from '#src/stores/dialog-store.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { openNameplate } from '#src/stores/nameplate-store.ts';
 import { usePreferences } from '#src/stores/preferences-store.ts';
-import { openFile, saveFile } from './files/circuit-file.ts';
+import { openFile, saveCircuit } from './files/circuit-file.ts';
 import { exportDrawing } from './files/exports.ts';
 
 const themes = { auto: 'Theme: as the system', light: 'Theme: light', dark: 'Theme: dark' } as const;
@@ -38,7 +38,7 @@ export function useMainMenu(screen: 'bench' | 'draw' | null): readonly MenuEntry
     ...screens,
     { id: 'new', label: 'New circuit\u2026', onAction: go('/start') },
     { id: 'open', label: 'Open a file\u2026', onAction: () => void openFile() },
-    { id: 'save', label: 'Save as a file', onAction: saveFile },
+    { id: 'save', label: 'Save as a file', onAction: saveCircuit },
     { rule: 'file' },
     { id: 'undo', label: 'Undo', hint: 'Ctrl Z', disabled: !undo, onAction: () => useDocument.getState().undo() },
     { id: 'redo', label: 'Redo', hint: 'Ctrl Y', disabled: !redo, onAction: () => useDocument.getState().redo() },

@@ -1,5 +1,5 @@
 import { useRouteError } from 'react-router-dom';
-import { saveFile } from './files/circuit-file.ts';
+import { saveCircuit } from './files/circuit-file.ts';
 
 /** The outermost fault: the page never goes white, and the circuit in hand can be saved from here. */
 export function RouteError() {
@@ -13,7 +13,7 @@ export function RouteError() {
         <button type="button" className="button-primary" onClick={() => window.location.reload()}>
           Open the page again
         </button>
-        <button type="button" className="button" onClick={saveFile}>
+        <button type="button" className="button" onClick={saveCircuit}>
           Save as a file
         </button>
       </div>

@@ -12,6 +12,7 @@ export const router = createBrowserRouter(
     {
       element: <Shell />,
       errorElement: <RouteError />,
+      hydrateFallbackElement: <p className="loading-words">Opening…</p>,
       children: [
         { path: '/', element: <BenchRoute /> },
         { path: '/draw', lazy: async () => ({ Component: (await import('./routes/draw.tsx')).DrawRoute }) },

@@ -1,6 +1,7 @@
 import { useEffect, useId, useRef, useState } from 'react';
+import { createPortal } from 'react-dom';
 import { preferredUnit, unitById } from '#shared/units/convert.ts';
-import { type ParseLimits, parseQuantity, type RefusedQuantity } from '#shared/units/parse.ts';
+import { type ParseLimits, parseQuantity, type RefusedQuantity, typedText } from '#shared/units/parse.ts';
 import type { QuantityId } from '#shared/units/quantities.ts';
 import { CautionIcon } from './icons.tsx';
 import { useFormat } from './use-format.ts';
@@ -27,6 +28,8 @@ export interface QuantityFieldProps {
   /** Called when the field is emptied; without it an empty field is refused. */
   readonly onClear?: () => void;
   readonly describedBy?: string;
+  /** Where the words of a refusal go, when not below the field (a row of its own in a table). */
+  readonly refusalSlot?: HTMLElement | null;
 }
 
 /** A number field that takes any unit of its quantity. Enter or leaving commits; Escape gives the former value back. */
@@ -36,7 +39,8 @@ export function QuantityField(props: QuantityFieldProps) {
   const id = useId();
   const field = useRef<HTMLInputElement>(null);
   const unit = preferredUnit(quantity, format.preferences);
-  const settled = value === null ? '' : (typed ?? format.quantity(value, quantity, { style: 'plate' }).text);
+  const settled =
+    value === null ? '' : typed !== undefined ? typedText(typed, quantity) : format.quantity(value, quantity, { style: 'plate' }).text;
   const [entry, setEntry] = useState(settled);
   const [refusal, setRefusal] = useState<RefusedQuantity | null>(null);
   useEffect(() => {
@@ -81,6 +85,11 @@ export function QuantityField(props: QuantityFieldProps) {
   }
 
   const refusalId = `${id}-refusal`;
+  const words = (refused: RefusedQuantity) => (
+    <div id={refusalId} role="alert" className="field-refusal">
+      <Refusal refusal={refused} settled={settled} use={accept} keep={keep} />
+    </div>
+  );
   return (
     <div className="quantity-field">
       <label htmlFor={id} className={props.hideLabel ? 'visually-hidden' : 'field-label'}>
@@ -108,11 +117,7 @@ export function QuantityField(props: QuantityFieldProps) {
           }
         }}
       />
-      {refusal && (
-        <div id={refusalId} role="alert" className="field-refusal">
-          <Refusal refusal={refusal} settled={settled} use={accept} keep={keep} />
-        </div>
-      )}
+      {refusal && (props.refusalSlot ? createPortal(words(refusal), props.refusalSlot) : words(refusal))}
     </div>
   );
 }

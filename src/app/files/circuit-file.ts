@@ -1,6 +1,7 @@
 import { documentText, MAX_FILE_BYTES, parseDocumentText } from '#shared/circuit/parse-document-text.ts';
 import { megabytes } from '#shared/circuit/text-size.ts';
-import { download, fileName, pickFile } from '#src/lib/download.ts';
+import { pickFile } from '#src/lib/pick-file.ts';
+import { fileName, saveFile } from '#src/lib/save-file.ts';
 import { showDialog } from '#src/stores/dialog-store.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { useKeeping } from '#src/stores/keeping-store.ts';
@@ -39,7 +40,7 @@ export async function openFile(): Promise<void> {
   if (file) await readFile(file);
 }
 
-export function saveFile(): void {
+export function saveCircuit(): void {
   const { document } = useDocument.getState();
-  download(fileName(document.title, '', 'json'), documentText(document), 'application/json');
+  saveFile(fileName(document.title, 'json'), documentText(document), 'application/json');
 }

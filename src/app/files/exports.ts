@@ -1,21 +1,13 @@
 import { schematicPicture } from '#shared/pictures/schematic.ts';
-import type { Picture } from '#shared/pictures/shape.ts';
 import { pictureToSvg } from '#shared/pictures/svg.ts';
 import { channelOf, valueAt } from '#shared/simulation/result.ts';
-import { download, fileName, svgToPng } from '#src/lib/download.ts';
+import { fileName, saveFile, svgToPng } from '#src/lib/save-file.ts';
 import { useCursor } from '#src/stores/cursor-store.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { useRuns } from '#src/stores/run-store.ts';
 
 /** Pixels per module of the exported drawing. */
 const MODULE = 10;
-
-async function hand(picture: Picture, scale: number, what: string, ending: 'svg' | 'png'): Promise<void> {
-  const { title } = useDocument.getState().document;
-  const svg = pictureToSvg(picture, 'light', { scale, ground: 'sheet' });
-  if (ending === 'svg') return download(fileName(title, what, 'svg'), svg, 'image/svg+xml');
-  download(fileName(title, what, 'png'), await svgToPng(svg, picture.width * scale, picture.height * scale));
-}
 
 /** The drawing with the case on it, at the cursor's moment. */
 export async function exportDrawing(ending: 'svg' | 'png'): Promise<void> {
@@ -29,5 +21,9 @@ export async function exportDrawing(ending: 'svg' | 'png'): Promise<void> {
       const channel = channelOf(run, address);
       return channel ? valueAt(run.times, channel.values, time) : undefined;
     });
-  await hand(schematicPicture(document, activeCase, readings, { inkScale }), MODULE, 'drawing', ending);
+  const picture = schematicPicture(document, activeCase, readings, { inkScale });
+  const svg = pictureToSvg(picture, 'light', { scale: MODULE, ground: 'sheet' });
+  const name = fileName(`${document.title} drawing`, ending);
+  if (ending === 'svg') saveFile(name, svg, 'image/svg+xml');
+  else saveFile(name, await svgToPng(svg, picture.width * MODULE, picture.height * MODULE, 2), 'image/png');
 }

@@ -2,9 +2,11 @@ import { type ReactNode, useMemo, useState } from 'react';
 import { CautionLine } from '#src/components/caution-line.tsx';
 import { ErrorRegion } from '#src/components/error-region.tsx';
 import { useFormat } from '#src/components/use-format.ts';
+import { BenchDrawing } from '#src/features/bench/bench-drawing.tsx';
 import { CaseRow } from '#src/features/cases/case-row.tsx';
 import { FindingsPanel } from '#src/features/findings/findings-panel.tsx';
 import { showMoment } from '#src/features/findings/show-moment.ts';
+import { LoadPicturePanel } from '#src/features/load-picture/load-picture-panel.tsx';
 import { NameplateLayer } from '#src/features/nameplate/nameplate-layer.tsx';
 import { TapePanel } from '#src/features/tape/tape-panel.tsx';
 import { useLayout } from '#src/lib/layout.ts';
@@ -31,6 +33,21 @@ export function BenchRoute() {
       {phone && <PhoneBench />}
     </div>
   );
+}
+
+function Drawing() {
+  return (
+    <>
+      <BenchDrawing />
+      <NameplateLayer />
+    </>
+  );
+}
+
+function Load() {
+  const numbered = useNumberedFindings();
+  const findings = useMemo(() => numbered.map(({ number, finding }) => ({ number, caseId: finding.caseId, at: finding.at })), [numbered]);
+  return <LoadPicturePanel findings={findings} />;
 }
 
 /** The tape with the numerals of the findings. */
@@ -70,7 +87,7 @@ function WideBench({ form, layout }: { readonly form: 'list' | 'rail'; readonly 
   return (
     <main className={`bench bench-${layout}`}>
       <Region name="drawing" title="The drawing">
-        <NameplateLayer />
+        <Drawing />
       </Region>
       <Region name="findings" title="Findings">
         <FindingsPanel form={form} />
@@ -79,7 +96,7 @@ function WideBench({ form, layout }: { readonly form: 'list' | 'rail'; readonly 
         <Tape lanes={layout === 'desk' ? 5 : 3} />
       </Region>
       <Region name="load" title="The load picture">
-        {null}
+        <Load />
       </Region>
       <div className="region-caution">
         <CautionLine form={form === 'rail' ? 'half' : 'whole'} />
@@ -94,7 +111,7 @@ function NarrowBench() {
   return (
     <main className="bench bench-narrow">
       <Region name="drawing" title="The drawing">
-        <NameplateLayer />
+        <Drawing />
       </Region>
       <div className="region-rail">
         <div className="rail-tabs" role="tablist" aria-label="Beside the drawing">
@@ -111,7 +128,7 @@ function NarrowBench() {
           </Region>
         ) : (
           <Region name="load" title="The load picture">
-            {null}
+            <Load />
           </Region>
         )}
       </div>
@@ -133,7 +150,7 @@ function PhoneBench() {
       <div className={`phone-view phone-view-${view}`}>
         {view === 'drawing' && (
           <Region name="drawing" title="The drawing">
-            <NameplateLayer />
+            <Drawing />
           </Region>
         )}
         {(view === 'tape' || view === 'drawing') && (
@@ -143,7 +160,7 @@ function PhoneBench() {
         )}
         {view === 'load' && (
           <Region name="load" title="The load picture">
-            {null}
+            <Load />
           </Region>
         )}
         {view === 'findings' && (

@@ -21,7 +21,7 @@ export function ComponentPlate({ componentId }: { readonly componentId: string }
   return (
     <PlateCard
       target={componentId}
-      title={`${kind.word} ${component.name}`.trim()}
+      title={`${kind.word.charAt(0).toUpperCase()}${kind.word.slice(1)} ${component.name}`.trim()}
       note={`${kind.title.toLowerCase()}${component.part ? `, ${component.part}` : ''}`}
     >
       <NameField component={component} />

@@ -1,5 +1,6 @@
-import type { ReactNode } from 'react';
+import { type ReactNode, useState } from 'react';
 import { otherUnit, preferredUnit } from '#shared/units/convert.ts';
+import { typedText } from '#shared/units/parse.ts';
 import type { QuantityId } from '#shared/units/quantities.ts';
 import { type FieldRefusal, QuantityField } from '#src/components/quantity-field.tsx';
 import { useFormat } from '#src/components/use-format.ts';
@@ -12,6 +13,7 @@ import { SourceFrame } from './source-frame.tsx';
 /** One value of a plate: name, value as typed, the same in the other system, and where it comes from. */
 export function PlateRow({ row }: { readonly row: PlateValue }) {
   const { spec } = row;
+  const [slot, setSlot] = useState<HTMLTableCellElement | null>(null);
   return (
     <>
       <tr className="plate-row" data-field={row.field} data-changed={row.changed || undefined}>
@@ -50,6 +52,7 @@ export function PlateRow({ row }: { readonly row: PlateValue }) {
               placeholder="not given"
               onCommit={(value, typed): FieldRefusal | undefined => applyValue(row.target, row.field, value, typed)}
               onClear={row.onClear}
+              refusalSlot={slot}
             />
           )}
         </td>
@@ -57,6 +60,9 @@ export function PlateRow({ row }: { readonly row: PlateValue }) {
         <td className="plate-source">
           <SourceFrame row={row} />
         </td>
+      </tr>
+      <tr className="plate-refusal">
+        <td colSpan={4} ref={setSlot} />
       </tr>
       {row.above && (
         <tr className="plate-above">
@@ -82,7 +88,7 @@ function Also({ row, quantity }: { readonly row: PlateValue; readonly quantity: 
   const parts: string[] = [];
   const other = otherUnit(quantity, preferredUnit(quantity, format.preferences));
   const shown = format.quantity(row.value, quantity, { style: 'plate' }).text;
-  if (row.typed && row.typed.replace(/\s/g, '') !== shown.replace(/\s/g, '')) parts.push(shown);
+  if (row.typed && typedText(row.typed, quantity).replace(/\s/g, '') !== shown.replace(/\s/g, '')) parts.push(shown);
   else if (other) parts.push(format.quantity(row.value, quantity, { style: 'plate', unit: other.id }).text);
   if (row.changed && typeof row.found === 'number') parts.push(`as found ${format.quantity(row.found, quantity, { style: 'plate' }).text}`);
   return parts.join(', ');
