@@ -171,12 +171,22 @@ describe('pins', () => {
 });
 
 describe('top edge', () => {
-  const view = { x, width: 700, size: 13, rowHeight: 23, short: false, bare: false };
+  const view = { x, width: 700, size: 13, rowHeight: 23, short: false, bare: false, mostRows: 3 as const };
   it('keeps marks clear of flags and their poles', () => {
     const flags = [{ id: 'a', time: 0.6, words: 'Solenoid a on', short: 'a on' }];
     const band = tapeBand(flags, [pin({ time: 0.62 })], [], view);
     expect(band.flags[0]).toMatchObject({ row: 0, x: 60 });
     expect(band.marks[0]).toMatchObject({ row: 1, words: 'A relief cracks', side: 'right' });
+  });
+  it('hangs a flag to the left where the right edge is near', () => {
+    const flags = [{ id: 'a', time: 6.8, words: 'Solenoid a on', short: 'a on' }];
+    expect(tapeBand(flags, [], [], view).flags[0]).toMatchObject({ x: 680, row: 0, mirrored: true });
+  });
+  it('has a third row only where it is allowed', () => {
+    const pins = [0.5, 0.52, 0.54].map((time, i) => pin({ time, caseId: 'ABC'[i] as string }));
+    const flags = [{ id: 'a', time: 0.3, words: 'Solenoid a on', short: 'a on' }];
+    expect(tapeBand(flags, pins, [], view).rows).toBe(3);
+    expect(tapeBand(flags, pins, [], { ...view, mostRows: 2 }).rows).toBe(2);
   });
   it('unfolds crowded flags as ticks', () => {
     const flags = [0.1, 0.15, 0.2, 0.25].map((time, i) => ({ id: `c${i}`, time, words: 'Solenoid a on', short: 'a on' }));

@@ -58,10 +58,12 @@ export function FlagEditor({ document, command, left, onEdit, onClose }: FlagEdi
       aria-label={`Command ${madeWords(document, kindOf, command, showIn(preferences))}`}
       className="tape-editor"
       style={{ left }}
-      onKeyDown={(event) => {
+      onKeyDownCapture={(event) => {
+        if (event.key !== 'Escape') return;
         event.stopPropagation();
-        if (event.key === 'Escape') onClose();
+        onClose();
       }}
+      onKeyDown={(event) => event.stopPropagation()}
     >
       <div className="tape-editor-fields">
         <QuantityField

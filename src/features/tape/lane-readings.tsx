@@ -9,19 +9,28 @@ import type { TapeCase, TapeLane, TapeModel } from './tape-model.ts';
 import { useCursorFrame } from './use-cursor-frame.ts';
 
 /** One reading that follows the cursor without rendering. */
-function Reading({ entry, lane, withUnit }: { readonly entry: TapeCase; readonly lane: TapeLane; readonly withUnit: boolean }) {
+function Reading({
+  entry,
+  lane,
+  unit: form,
+}: {
+  readonly entry: TapeCase;
+  readonly lane: TapeLane;
+  readonly unit: 'whole' | 'short' | 'none';
+}) {
   const value = useRef<HTMLSpanElement>(null);
   const unit = useRef<HTMLSpanElement>(null);
   const { preferences } = useFormat();
   useCursorFrame((time) => {
     const reading = laneReading(entry, lane, time, preferences);
     if (value.current) value.current.textContent = reading.value;
-    if (unit.current) unit.current.textContent = reading.unit === '' ? '' : THIN_SPACE + reading.unit;
+    const words = form === 'short' ? reading.unit.replace('× rated', '×') : reading.unit;
+    if (unit.current) unit.current.textContent = words === '' ? '' : THIN_SPACE + words;
   });
   return (
     <>
       <span ref={value} className="tape-value" style={{ '--case-ink': `var(--case-${entry.ink})` } as React.CSSProperties} />
-      {withUnit && <span ref={unit} className="tape-unit" />}
+      {form !== 'none' && <span ref={unit} className="tape-unit" />}
     </>
   );
 }
@@ -33,24 +42,26 @@ export interface LaneNameProps {
   readonly height: number;
   /** Readings of the overlaid cases stand in boxes below (big lane) or on the right (small lanes). */
   readonly big: boolean;
+  /** Show readings of the overlaid cases. */
+  readonly others: boolean;
 }
 
 /** Left column of one lane: its title, the reading of the case on the drawing, small ones for the overlays. */
-export function LaneName({ model, lane, top, height, big }: LaneNameProps) {
+export function LaneName({ model, lane, top, height, big, others: withOthers }: LaneNameProps) {
   const active = model.cases[model.activeIndex];
-  const others = model.cases.filter((entry) => !entry.active);
+  const others = withOthers ? model.cases.filter((entry) => !entry.active) : [];
   return (
     <div className="tape-name" style={{ top, height }} data-big={big || undefined}>
       <div className="tape-title">{lane.lane.title}</div>
       {active && (
         <div className="tape-reading">
           <span className="tape-main">
-            <Reading entry={active} lane={lane} withUnit />
+            <Reading entry={active} lane={lane} unit={others.length > 0 && !big ? 'short' : 'whole'} />
           </span>
           {!big &&
             others.map((entry) => (
               <span key={entry.id} className="tape-other">
-                {entry.pen.letter} <Reading entry={entry} lane={lane} withUnit={false} />
+                {entry.pen.letter} <Reading entry={entry} lane={lane} unit="none" />
               </span>
             ))}
         </div>
@@ -60,7 +71,7 @@ export function LaneName({ model, lane, top, height, big }: LaneNameProps) {
           {others.map((entry) => (
             <span key={entry.id} className="tape-box">
               <CaseLetter letter={entry.pen.letter} ink={entry.ink} size={17} />
-              <Reading entry={entry} lane={lane} withUnit={false} />
+              <Reading entry={entry} lane={lane} unit="none" />
             </span>
           ))}
         </div>
@@ -90,7 +101,7 @@ export function FoldedRow({ model, lane, onUnfold }: FoldedRowProps) {
           <span key={entry.id} className="tape-folded-value" data-active={entry.active || undefined}>
             <span className="tape-folded-bar" style={{ backgroundColor: `var(--case-${entry.ink})` }} />
             <span className="visually-hidden">{entry.pen.letter}</span>
-            <Reading entry={entry} lane={lane} withUnit={false} />
+            <Reading entry={entry} lane={lane} unit="none" />
           </span>
         ))}
         <span className="tape-folded-unit">{lane.lane.role === 'load' ? '× rated' : lane.unit.symbol}</span>

@@ -8,13 +8,15 @@ const speeds = [
 ] as const;
 
 export interface RunControlsProps {
-  /** Only the button and the speed's number (phone). */
+  /** The speed's number alone. */
   readonly compact: boolean;
+  /** 'Running' or 'Paused' beside the button. */
+  readonly words: boolean;
   readonly duration: number;
 }
 
 /** Run and pause, and the speed of playback. */
-export function RunControls({ compact, duration }: RunControlsProps) {
+export function RunControls({ compact, words, duration }: RunControlsProps) {
   const playing = useCursor((state) => state.playing);
   const speed = useCursor((state) => state.speed);
   const { setPlaying, setSpeed } = useCursor.getState();
@@ -33,7 +35,7 @@ export function RunControls({ compact, duration }: RunControlsProps) {
         <Icon name={playing ? 'pause' : 'play'} size={18} />
       </button>
       <div className="tape-run-words">
-        {!compact && <span>{playing ? 'Running' : 'Paused'}</span>}
+        {words && <span>{playing ? 'Running' : 'Paused'}</span>}
         <button
           type="button"
           className="tape-speed"

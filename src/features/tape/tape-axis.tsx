@@ -1,7 +1,7 @@
 import { tickDigits } from '#shared/pictures/scale.ts';
 import { useFormat } from '#src/components/use-format.ts';
-import { type TapeGeometry, timeScale } from './draw-traces.ts';
 import { TapePlate } from './tape-cursor.tsx';
+import { type TapeGeometry, timeScale } from './tape-geometry.ts';
 import type { TapeModel } from './tape-model.ts';
 
 export interface TapeAxisProps {

@@ -1,7 +1,8 @@
 import { useEffect, useLayoutEffect, useRef, useState } from 'react';
 import { useTheme } from '#src/lib/theme.ts';
 import { usePreferences } from '#src/stores/preferences-store.ts';
-import { drawTraces, type TapeGeometry } from './draw-traces.ts';
+import { drawTraces } from './draw-traces.ts';
+import type { TapeGeometry } from './tape-geometry.ts';
 import type { TapeModel } from './tape-model.ts';
 import { readTokens } from './tokens.ts';
 

@@ -1,7 +1,7 @@
 import { useMemo, useRef } from 'react';
 import { valueAt } from '#shared/simulation/result.ts';
 import { useFormat } from '#src/components/use-format.ts';
-import { laneScale, type TapeGeometry, timeScale } from './draw-traces.ts';
+import { laneScale, type TapeGeometry, timeScale } from './tape-geometry.ts';
 import type { TapeModel } from './tape-model.ts';
 import { useCursorFrame } from './use-cursor-frame.ts';
 

@@ -74,10 +74,12 @@ export function TapeFlags(props: TapeFlagsProps) {
             key={id}
             type="button"
             className="tape-flag"
+            data-command={id}
+            data-mirrored={flag.mirrored || undefined}
             data-tick={flag.row < 0 || undefined}
             data-fixed={!props.canEdit || undefined}
             style={{
-              transform: `translateX(${flag.x}px)`,
+              transform: `translateX(${flag.mirrored ? flag.x - flag.width : flag.x}px)`,
               top: row * props.rowHeight,
               height: props.height - row * props.rowHeight,
               width: flag.row < 0 ? undefined : flag.width,

@@ -39,6 +39,33 @@ export function TapeFoot({ document, model, sheet, onSheet, room }: TapeFootProp
       window.removeEventListener('keydown', leave);
     };
   }, [sheet, onSheet]);
+  const saving = (
+    <>
+      <button
+        type="button"
+        className="tape-menu-item"
+        disabled={runs.length === 0}
+        onClick={() => {
+          saveFile(fileName(document.title, 'csv'), tracesToCsv(runs, preferences), 'text/csv;charset=utf-8');
+          onSheet(null);
+        }}
+      >
+        Traces as CSV
+      </button>
+      <button
+        type="button"
+        className="tape-menu-item"
+        disabled={runs.length === 0}
+        onClick={() => {
+          saveFile(fileName(`${document.title} tape`, 'svg'), tapeSvg(document, model, preferences), 'image/svg+xml');
+          onSheet(null);
+        }}
+      >
+        Tape as SVG
+      </button>
+    </>
+  );
+  const narrow = room === 1;
   return (
     <>
       <div className="tape-foot">
@@ -48,39 +75,21 @@ export function TapeFoot({ document, model, sheet, onSheet, room }: TapeFootProp
         <button type="button" aria-pressed={sheet === 'table'} onClick={() => toggle('table')}>
           Table
         </button>
-        <button type="button" aria-expanded={sheet === 'save'} onClick={() => toggle('save')}>
-          Save
-        </button>
+        {!narrow && (
+          <button type="button" aria-expanded={sheet === 'save'} onClick={() => toggle('save')}>
+            Save
+          </button>
+        )}
       </div>
       {sheet === 'lanes' && (
         <section className="tape-sheet" aria-label="Lanes">
           <LaneMenu document={document} run={run} shown={model.lanes.map((lane) => lane.lane.address)} most={room} onChoose={setChosen} />
+          {narrow && saving}
         </section>
       )}
       {sheet === 'save' && (
         <section className="tape-sheet" aria-label="Save">
-          <button
-            type="button"
-            className="tape-menu-item"
-            disabled={runs.length === 0}
-            onClick={() => {
-              saveFile(fileName(document.title, 'csv'), tracesToCsv(runs, preferences), 'text/csv;charset=utf-8');
-              onSheet(null);
-            }}
-          >
-            Traces as CSV
-          </button>
-          <button
-            type="button"
-            className="tape-menu-item"
-            disabled={runs.length === 0}
-            onClick={() => {
-              saveFile(fileName(`${document.title} tape`, 'svg'), tapeSvg(document, model, preferences), 'image/svg+xml');
-              onSheet(null);
-            }}
-          >
-            Tape as SVG
-          </button>
+          {saving}
         </section>
       )}
     </>

@@ -1,4 +1,4 @@
-import type { TapeGeometry } from './draw-traces.ts';
+import type { TapeGeometry } from './tape-geometry.ts';
 import type { TapeModel } from './tape-model.ts';
 
 /** Measures of the tape [CSS px]; the style sheet carries the same left column. */

@@ -8,7 +8,6 @@ import { useFormat } from '#src/components/use-format.ts';
 import { useSize } from '#src/lib/use-size.ts';
 import { useCursor } from '#src/stores/cursor-store.ts';
 import { useDocument } from '#src/stores/document-store.ts';
-import { timeScale } from './draw-traces.ts';
 import { EventTable } from './event-table.tsx';
 import { FlagEditor } from './flag-editor.tsx';
 import { useLaneChoice } from './lane-store.ts';
@@ -16,6 +15,7 @@ import { RunControls } from './run-controls.tsx';
 import { TapeAxis } from './tape-axis.tsx';
 import { TapeFlags } from './tape-flags.tsx';
 import { TapeFoot, type TapeSheet } from './tape-foot.tsx';
+import { timeScale } from './tape-geometry.ts';
 import { planTape, tapeMeasures } from './tape-layout.ts';
 import { TapeMarks } from './tape-marks.tsx';
 import { AddFlagMenu } from './tape-menus.tsx';
@@ -25,6 +25,11 @@ import { usePlayback } from './use-playback.ts';
 import { useTape } from './use-tape.ts';
 import { useTapeKeys } from './use-tape-keys.ts';
 import './tape.css';
+
+/** Gives the focus back to a flag once its sheet is gone. */
+function focusFlag(id: string) {
+  requestAnimationFrame(() => window.document.querySelector<HTMLElement>(`[data-command="${id}"]`)?.focus());
+}
 
 /** A numbered finding as the tape shows it. */
 export interface TapeFinding {
@@ -107,8 +112,9 @@ export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true 
         rowHeight: measures.rowHeight,
         short: measures.shortFlags,
         bare: measures.bareMarks,
+        mostRows: lanes === 1 ? 2 : 3,
       }),
-    [flags, pins, numerals, x, geometry.plotWidth, measures.rowHeight, measures.shortFlags, measures.bareMarks],
+    [flags, pins, numerals, x, geometry.plotWidth, measures.rowHeight, measures.shortFlags, measures.bareMarks, lanes],
   );
   const verticals = useMemo(
     () =>
@@ -143,7 +149,7 @@ export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true 
       }
       onKeyDown={handleKey}
     >
-      <RunControls compact={lanes === 1} duration={model.duration} />
+      <RunControls compact={lanes < 5} words={lanes > 1} duration={model.duration} />
       <div className="tape-band">
         <TapeMarks marks={band.marks} rowHeight={band.rowHeight} top={0} showTime={seconds} onPick={pick} onFinding={onFinding} />
         <TapeFlags
@@ -172,7 +178,7 @@ export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true 
           </button>
         )}
       </div>
-      <TapePlot ref={plotRef} model={model} plan={plan} verticals={verticals} hidden={sheet === 'table'} />
+      <TapePlot ref={plotRef} model={model} plan={plan} overlayReadings={lanes === 5} verticals={verticals} hidden={sheet === 'table'} />
       <TapeAxis model={model} geometry={geometry} />
       <TapeFoot document={document} model={model} sheet={sheet} onSheet={setSheet} room={lanes} />
       <EventTable document={document} model={model} findings={findings} visible={sheet === 'table'} />
@@ -199,7 +205,10 @@ export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true 
           command={command}
           left={Math.min(Math.max(measures.left + x(command.time) - 20, 4), Math.max(4, size.width + measures.left - 330))}
           onEdit={edit}
-          onClose={() => setEditing(null)}
+          onClose={() => {
+            setEditing(null);
+            focusFlag(command.id);
+          }}
         />
       )}
     </section>

@@ -1,12 +1,12 @@
 import { type Ref, useEffect, useRef } from 'react';
 import { useFormat } from '#src/components/use-format.ts';
 import { useCursor } from '#src/stores/cursor-store.ts';
-import { timeScale, type Vertical } from './draw-traces.ts';
 import { laneReading } from './lane-reading.ts';
 import { FoldedRow, LaneName } from './lane-readings.tsx';
 import { useLaneChoice } from './lane-store.ts';
 import { TapeCanvas } from './tape-canvas.tsx';
 import { TapeCursor } from './tape-cursor.tsx';
+import { timeScale, type Vertical } from './tape-geometry.ts';
 import { FOLDED_ROW, type TapePlan } from './tape-layout.ts';
 import type { TapeModel } from './tape-model.ts';
 
@@ -16,10 +16,12 @@ export interface TapePlotProps {
   readonly plan: TapePlan;
   readonly verticals: readonly Vertical[];
   readonly hidden: boolean;
+  /** Readings of the overlaid cases beside that of the case on the drawing. */
+  readonly overlayReadings: boolean;
 }
 
 /** The lanes: readings on the left, traces, cursor; dragging anywhere in the lanes moves the cursor. */
-export function TapePlot({ ref, model, plan, verticals, hidden }: TapePlotProps) {
+export function TapePlot({ ref, model, plan, verticals, hidden, overlayReadings }: TapePlotProps) {
   const { geometry } = plan;
   const setFocus = useLaneChoice((state) => state.setFocus);
   const dragging = useRef(false);
@@ -43,6 +45,7 @@ export function TapePlot({ ref, model, plan, verticals, hidden }: TapePlotProps)
               top={place.top}
               height={place.height}
               big={plan.folded.length > 0}
+              others={overlayReadings}
             />
           );
         })}
