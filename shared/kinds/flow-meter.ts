@@ -29,9 +29,9 @@ export const flowMeter = defineKind({
       'flow',
       60 * LITRE_PER_MINUTE,
       [0.1 * LITRE_PER_MINUTE, 5000 * LITRE_PER_MINUTE],
-      'Flow at the rated drop; the end of its scale.',
+      'Flow at the rated drop.',
       S.PRACTICE,
-      { equation: LAW, ratingOf: 'flow' },
+      { equation: LAW },
     ),
     number(
       'plate',

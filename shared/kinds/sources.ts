@@ -35,3 +35,6 @@ export const CONTINUITY = 'Fluid Power Engineering (2009), eq. 2.51 to 2.57';
 export const POWER = 'power = torque × speed: Engineering ToolBox; Fluid Power with Applications, 6th ed.';
 export const NEWTON = 'Newton’s law';
 export const SYMBOLS = 'ISO 1219-1';
+
+/** Limits of a reading that has none of its own. */
+export const AS_INPUTS = 'No better than the figures that go in.';

@@ -1,9 +1,10 @@
 import { portValue } from '../access.ts';
 import { indices, severity } from '../build.ts';
 import { defineKind, type Plate, type RunConstants } from '../kind.ts';
+import { pumpFaults, pumpInputs, pumpScrews } from './adjusters.ts';
 import { DRAIN, evaluatePump, OUTLET, pumpCoefficients, pumpEntries, pumpFlow, pumpJacobian, SHAFT, SUCTION } from './kernel.ts';
 import { frictionFromEfficiency, INLET_WARNING } from './laws.ts';
-import { pumpFaults, pumpInputs, pumpParameters, pumpScrews } from './parameters.ts';
+import { pumpParameters } from './parameters.ts';
 import { pumpReadings } from './readings.ts';
 
 const C = indices(pumpCoefficients);

@@ -47,7 +47,7 @@ export const pumpReadings: readonly ReadingSpec[] = [
     label: 'Displacement now',
     quantity: 'displacement',
     value: (block, i, w) => stateValue(block, i, 0, w) * coefficient(block, i, C.displacement),
-    explain: explain('Vg = α·D', 'α stroke, D displacement', ['stroke', 'displacement'], '', S.PUMP_FLOW),
+    explain: explain('Vg = α·D', 'α stroke, D displacement', ['stroke', 'displacement'], S.AS_INPUTS, S.PUMP_FLOW),
   },
   {
     id: 'flow',
@@ -120,14 +120,14 @@ export const pumpReadings: readonly ReadingSpec[] = [
     label: 'Shaft power taken',
     quantity: 'power',
     value: (block, i, w) => torque(block, i, w) * portValue(block, i, SHAFT, w),
-    explain: explain('P = T·w', 'T torque taken, w speed', ['torque'], '', S.POWER),
+    explain: explain('P = T·w', 'T torque taken, w speed', ['torque'], S.AS_INPUTS, S.POWER),
   },
   {
     id: 'hydraulicPower',
     label: 'Hydraulic power',
     quantity: 'power',
     value: (block, i, w) => outletFlow(block, i, w) * (portValue(block, i, OUTLET, w) - portValue(block, i, SUCTION, w)),
-    explain: explain('P = Q·Δp', 'Q flow at the outlet, Δp outlet − suction', ['flow', 'outletPressure'], '', S.POWER),
+    explain: explain('P = Q·Δp', 'Q flow at the outlet, Δp outlet − suction', ['flow', 'outletPressure'], S.AS_INPUTS, S.POWER),
   },
   {
     id: 'filling',

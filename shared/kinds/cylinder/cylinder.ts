@@ -35,7 +35,7 @@ export const cylinder = defineKind({
   letter: 'A',
   stage: 'act',
   about:
-    'Double-acting cylinder with one rod, its moving mass and its load: constant force, weight by angle, spring, and a piece of work whose force rises with position and springs back with the rod. Friction with a rounded sign: a held rod creeps by less than 2 mm/s. Stiff end stops. Cushions and seal stretch are left out.',
+    'Double-acting cylinder with one rod, its moving mass and its load: constant force, weight by angle, spring, and a piece of work whose force rises with position and, once the rod goes back, leaves only its springback. Friction with a rounded sign: a held rod creeps by less than 2 mm/s. Stiff end stops. Cushions and seal stretch are left out.',
   parameters: cylinderParameters,
   faults: cylinderFaults,
   ports: [
@@ -156,10 +156,10 @@ export const cylinder = defineKind({
       explain: explain(
         'F = load + m·g·sin(angle) + spring + work',
         'work = force at full·((x − contact)/(full − contact))^shape',
-        ['loadForce', 'mass', 'angle', 'springRate', 'workContact', 'workFull', 'workForce', 'workShape'],
+        ['loadForce', 'mass', 'angle', 'springRate', 'workContact', 'workFull', 'workForce', 'workShape', 'workSpringback'],
         'Positive against coming out.',
         'definition of this load',
-        ['The work springs back with the rod.'],
+        ['Once the rod goes back only the springback of the work is left.'],
       ),
     },
     {
@@ -167,7 +167,7 @@ export const cylinder = defineKind({
       label: 'Cap-side pressure',
       quantity: 'pressure',
       value: (block, i, w) => portValue(block, i, 0, w),
-      explain: explain(CONTINUITY, 'V = dead volume + AA·x', ['A.pressure', 'capDeadVolume'], '', S.CONTINUITY),
+      explain: explain(CONTINUITY, 'V = dead volume + AA·x', ['A.pressure', 'capDeadVolume'], S.AS_INPUTS, S.CONTINUITY),
     },
     {
       id: 'rodPressure',
@@ -187,7 +187,7 @@ export const cylinder = defineKind({
       label: 'Higher of both sides',
       quantity: 'pressure',
       value: (block, i, w) => Math.max(portValue(block, i, 0, w), portValue(block, i, 1, w)),
-      explain: explain('the larger of pA, pB', 'pressures of the two sides', ['capPressure', 'rodPressure'], '', S.DEFINITION),
+      explain: explain('the larger of pA, pB', 'pressures of the two sides', ['capPressure', 'rodPressure'], S.AS_INPUTS, S.DEFINITION),
     },
   ],
   checks: (plate) => {

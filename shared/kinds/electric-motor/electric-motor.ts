@@ -2,7 +2,8 @@ import { stateValue } from '../access.ts';
 import { indices } from '../build.ts';
 import { type Block, defineKind, type Workspace } from '../kind.ts';
 import { evaluateMotor, motorCoefficients, motorInputIds, prepareMotor } from './curve.ts';
-import { motorFaults, motorInputs, motorParameters } from './parameters.ts';
+import { motorFaults, motorInputs } from './inputs.ts';
+import { motorParameters } from './parameters.ts';
 import { motorReadings } from './readings.ts';
 
 const C = indices(motorCoefficients);
