@@ -8,6 +8,9 @@ import type { SymbolicLu } from '../numerics/symbolic-lu.ts';
 import type { QuantityId } from '../units/quantities.ts';
 import type { Problem } from './result.ts';
 
+/** Least oil volume of a node [m³]. */
+export const LEAST_VOLUME = 1e-6;
+
 /** All instances of one kind, twice: adding to nodes (integrating) and to a slot per port (reading). */
 export interface BlockPair {
   readonly kind: ComponentKind;

@@ -9,14 +9,12 @@ import { oilModel, runConstants } from '../fluid/run-constants.ts';
 import { kindOf } from '../kinds/registry.ts';
 import { analyse } from '../numerics/symbolic-lu.ts';
 import { type Built, buildBlocks, type Layout } from './build-blocks.ts';
-import type { CompiledCircuit, StateLabel } from './circuit.ts';
+import { type CompiledCircuit, LEAST_VOLUME, type StateLabel } from './circuit.ts';
 import { joiningProblems, openPorts, tankProblems } from './drawing-problems.ts';
 import { dutyProblems } from './duty-problems.ts';
 import { planChannels } from './plan-channels.ts';
 import type { Problem } from './result.ts';
 
-/** Least oil volume of a node [m³]. */
-export const LEAST_VOLUME = 1e-6;
 /** Inertia taken for a shaft on which nothing has any [kg·m²]. */
 const LEAST_INERTIA = 1e-4;
 /** Scales for absolute tolerances: pressure [Pa], shaft speed [rad/s]. */

@@ -2,7 +2,7 @@ import { type Move, movedProfile, type Profile, pieceAt } from '../circuit/profi
 import { effectiveModulus, effectiveModulusSlope, type OilModel } from '../fluid/effective-modulus.ts';
 import type { Block, ComponentKind, Workspace } from '../kinds/kind.ts';
 import type { OdeSystem } from '../numerics/solver.ts';
-import type { CompiledCircuit } from './circuit.ts';
+import { type CompiledCircuit, LEAST_VOLUME } from './circuit.ts';
 
 /** States on which another state depends; at least 1. */
 function statesThatMatter({ size, pattern }: CompiledCircuit): number {
@@ -127,7 +127,7 @@ export class CircuitSystem implements OdeSystem {
     for (let k = 0; k < flows.length; k++) flows[k]!(blocks[k]!, w);
     const { nodes, compliance } = circuit;
     for (let i = 0; i < nodes; i++) {
-      const c = volume[i]! / effectiveModulus(y[i]!, oil) + compliance[i]!;
+      const c = Math.max(volume[i]!, LEAST_VOLUME) / effectiveModulus(y[i]!, oil) + compliance[i]!;
       capacity[i] = c;
       dy[i] = balance[i]! / c;
     }
@@ -148,9 +148,11 @@ export class CircuitSystem implements OdeSystem {
       const modulus = effectiveModulus(y[i]!, oil);
       const slope = effectiveModulusSlope(y[i]!, oil);
       const c = capacity[i]!;
-      values[i] = (balance[i]! * volume[i]! * slope) / (modulus * modulus * c);
-      // Kernels scale by 1/volume; with yielding walls the share of the moving volume is smaller.
-      if (compliance[i]! > 0) volume[i]! += modulus * compliance[i]!;
+      const v = Math.max(volume[i]!, LEAST_VOLUME);
+      values[i] = (balance[i]! * v * slope) / (modulus * modulus * c);
+      // Kernels scale by 1/volume: with yielding walls the share of the moving volume is smaller, and a volume held at the
+      // least one does not move at all.
+      volume[i] = volume[i]! < LEAST_VOLUME ? Number.POSITIVE_INFINITY : v + modulus * compliance[i]!;
     }
     for (let k = 0; k < jacobians.length; k++) jacobians[k]!(blocks[k]!, w);
     const { rows } = pattern;
@@ -171,6 +173,6 @@ export class CircuitSystem implements OdeSystem {
   /** Oil volume taken up by a node per pascal [m³/Pa], after `read`. */
   capacityOf(node: number): number {
     const { reading, oil, circuit } = this;
-    return reading.volume[node]! / effectiveModulus(reading.y[node]!, oil) + circuit.compliance[node]!;
+    return Math.max(reading.volume[node]!, LEAST_VOLUME) / effectiveModulus(reading.y[node]!, oil) + circuit.compliance[node]!;
   }
 }
