@@ -42,8 +42,10 @@ export interface TagPlace {
 }
 
 export interface Sheet {
-  /** What every symbol covers, and readings and other words. */
-  readonly taken: readonly Box[];
+  /** What every symbol covers: neither tags nor strings lie on it. */
+  readonly symbols: readonly Box[];
+  /** Readings, item codes, the key: tags do not cover them, strings may. */
+  readonly words: readonly Box[];
   /** Legs of working lines. */
   readonly legs: readonly { readonly a: Point; readonly b: Point }[];
   /** Tags stay inside; absent = anywhere. */
@@ -94,12 +96,12 @@ function candidates(request: TagRequest, size: Size, sheet: Sheet): Candidate[] 
     if (length > STRING_MOST * grow) return;
     found.push({ box, cost: length + 0.5 * slot + out + (near[slot] ?? 0) });
   };
-  for (const out of [0, -1.2, 1.5, 3, 5, 7]) {
+  for (const out of [0, -1.5, 1.5, 3, 5, 7]) {
     const clear = (SLOT_CLEAR + out) * (out <= 0 ? 1 : grow);
-    const slides = [0, 2, -2, 4, -4, 7, -7, 10, -10];
+    const slides = [0, 2, -2, 4, -4, 6, -6, 8, -8, 10, -10, 12, -12];
     for (const slide of slides) {
-      const y = anchor.y - size.h / 2 + slide * grow;
-      const x = anchor.x - size.w / 2 + slide * grow;
+      const y = held(anchor.y - size.h / 2 + slide * grow, sheet.frame?.y, sheet.frame?.h, size.h);
+      const x = held(anchor.x - size.w / 2 + slide * grow, sheet.frame?.x, sheet.frame?.w, size.w);
       offer(right + clear, y, 0, out);
       offer(outline.x - clear - size.w, y, 1, out);
       offer(x, outline.y - clear - size.h, 2, out);
@@ -111,6 +113,11 @@ function candidates(request: TagRequest, size: Size, sheet: Sheet): Candidate[] 
     offer(outline.x - clear - size.w, bottom + clear, 7, out);
   }
   return found.sort((a, b) => a.cost - b.cost);
+}
+
+/** A tag slides along a side no further than the frame. */
+function held(value: number, from: number | undefined, room: number | undefined, size: number): number {
+  return from === undefined || room === undefined ? value : Math.max(from, Math.min(from + room - size, value));
 }
 
 /** Extra cost of the slots on whose side a line leaves: right, left, top, bottom, then the corners. */
@@ -137,7 +144,8 @@ function judge(request: TagRequest, place: TagPlace, sheet: Sheet, others: reado
   const blocked =
     !inside(box, sheet.frame) ||
     request.bodies.some((body) => overlaps(box, body, 0.1)) ||
-    sheet.taken.some((other) => overlaps(box, other, ROOM)) ||
+    sheet.symbols.some((other) => overlaps(box, other, ROOM)) ||
+    sheet.words.some((other) => overlaps(box, other, ROOM)) ||
     sheet.legs.some((leg) => legMeets(leg.a, leg.b, grown(box, ROOM + 0.1))) ||
     others.some((other) => overlaps(box, other.box, ROOM));
   if (blocked) return { free: false, crossing: true };
@@ -145,7 +153,7 @@ function judge(request: TagRequest, place: TagPlace, sheet: Sheet, others: reado
   const strings =
     others.some((other) => stringCrosses(string, other.box)) ||
     others.some((other) => stringCrosses(other.string, box)) ||
-    sheet.taken.some((other) => !own.has(key(other)) && stringCrosses(string, other));
+    sheet.symbols.some((other) => !own.has(key(other)) && stringCrosses(string, other));
   if (strings) return { free: false, crossing: true };
   const end = beforeAnchor(string);
   const crossing =
@@ -196,7 +204,8 @@ function leastBad(request: TagRequest, form: TagForm, sheet: Sheet, others: read
   let least = Number.POSITIVE_INFINITY;
   for (const { box, cost } of candidates(request, size, { ...sheet, grow: (sheet.grow ?? 1) * 1.5 })) {
     let over = cost * 0.05 + (inside(box, sheet.frame) ? 0 : 200);
-    for (const other of sheet.taken) over += shared(box, other);
+    for (const other of sheet.symbols) over += shared(box, other);
+    for (const other of sheet.words) over += shared(box, other);
     for (const other of others) over += 4 * shared(box, other.box);
     for (const leg of sheet.legs) if (legMeets(leg.a, leg.b, box)) over += 2;
     if (over < least) {
@@ -215,12 +224,12 @@ function shared(a: Box, b: Box): number {
 }
 
 /** Places of all tags by address. Dragged tags stay where they were put; the one in hand is seated next, then those that stood
- *  somewhere before, then the rest in the order given (flow order). */
+ *  somewhere before, then the rest: large ones first, in the order given (flow order). */
 export function placeTags(requests: readonly TagRequest[], sheet: Sheet): ReadonlyMap<string, TagPlace> {
-  const rank = (request: TagRequest) => (request.dragged ? 0 : request.inHand ? 1 : request.before ? 2 : 3);
-  const order = requests
-    .map((request, index) => ({ request, index }))
-    .sort((a, b) => rank(a.request) - rank(b.request) || a.index - b.index);
+  const rank = (request: TagRequest) =>
+    (request.dragged ? 0 : request.inHand ? 1 : request.before ? 2 : 3) * 4 + forms.indexOf(request.form);
+  const order = requests.map((request, index) => ({ request, index }));
+  order.sort((a, b) => rank(a.request) - rank(b.request) || a.index - b.index);
   const placed: TagPlace[] = [];
   for (const { request } of order) {
     if (request.dragged) {

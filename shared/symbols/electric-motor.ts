@@ -49,9 +49,9 @@ export const electricMotorSymbol: SymbolDefinition = {
     relayDial: { x: 1.2, y: 1.2 },
     'reading.torque': { x: 3.4, y: -2.6 },
     'reading.torqueRatio': { x: 3.4, y: -0.7 },
-    'reading.speed': { x: 12.6, y: 7 },
+    'reading.speed': { x: 12.6, y: 7.6 },
   },
-  code: { x: 7.9, y: 8.2 },
+  code: { x: 0.4, y: 8.3 },
   still: () => [circle(4, 4, 4), letter(4, 4.75, 'M', 2.5, 700, 'ink'), letter(4, 6.2, '3~', 1.2, 600, 'ink')],
   moving,
 };

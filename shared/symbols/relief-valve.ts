@@ -31,7 +31,7 @@ export const reliefValveSymbol: SymbolDefinition = {
     P: { x: 3, y: 0, side: 'top', stub: [3, 2] },
     T: { x: 3, y: 6, side: 'bottom' },
   },
-  anchors: { setPressure: { x: 7.6, y: 2 }, 'reading.flow': { x: -2, y: 9 } },
+  anchors: { setPressure: { x: 7.6, y: 2 }, 'reading.flow': { x: 11.8, y: 7.6 } },
   code: { x: -0.4, y: 7.2 },
   still,
   moving,

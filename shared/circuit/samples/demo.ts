@@ -31,7 +31,7 @@ import {
 export const demoCircuit: CircuitDocument = sample({
   title: 'Cardboard press, packing shed 2',
   components: [
-    part('M1', 'electric-motor', [6, 29], {
+    part('M1', 'electric-motor', [9, 29], {
       ratedPower: kilowatts(5.5),
       ratedVoltage: volts(400),
       ratedFrequency: hertz(50),
@@ -50,7 +50,7 @@ export const demoCircuit: CircuitDocument = sample({
     part(
       'P1',
       'compensated-pump',
-      [20, 26],
+      [24, 26],
       {
         displacement: cubic(28),
         compensatorPressure: bar(190),
@@ -75,14 +75,14 @@ export const demoCircuit: CircuitDocument = sample({
         locked: ['minVolumeStop'],
       },
     ),
-    part('V1', 'check-valve', [34, 23], {}),
-    part('J1', 'junction', [41, 23], {
+    part('V1', 'check-valve', [37, 24], {}),
+    part('J1', 'junction', [43, 24], {
       shape: choice('tee'),
     }),
     part(
       'V2',
       'relief-valve',
-      [39, 29],
+      [41, 28],
       {
         type: choice('pilot'),
         setPressure: bar(215),
@@ -96,20 +96,20 @@ export const demoCircuit: CircuitDocument = sample({
       },
       { screws: ['setPressure'], locked: ['setPressure'] },
     ),
-    part('J2', 'junction', [47, 23], {
+    part('J2', 'junction', [57, 24], {
       shape: choice('tee'),
     }),
-    part('S1', 'pressure-gauge', [45, 15], {
+    part('S1', 'pressure-gauge', [55, 17], {
       range: bar(250),
       lag: milliseconds(50),
     }),
-    part('V3', 'directional-valve-4-3', [61, 18], {
+    part('V3', 'directional-valve-4-3', [69, 18], {
       centre: choice('tandem'),
       ratedFlow: litres(60),
       ratedDrop: bar(5),
       ratedPressure: bar(315),
     }),
-    part('A1', 'cylinder', [53, 4], {
+    part('A1', 'cylinder', [61, 4], {
       bore: millimetres(63),
       rod: millimetres(36),
       stroke: millimetres(500),
@@ -121,15 +121,21 @@ export const demoCircuit: CircuitDocument = sample({
       workShape: choice('1'),
       ratedPressure: bar(250),
     }),
-    part('Z1', 'filter', [69, 28], {
-      ratedFlow: litres(60),
-      ratedDrop: bar(0.5),
-      bypassPressure: bar(2),
-    }),
-    part('T1', 'tank', [26, 40]),
-    part('T2', 'tank', [30, 40]),
-    part('T3', 'tank', [40, 40]),
-    part('T4', 'tank', [69, 40]),
+    part(
+      'Z1',
+      'filter',
+      [77, 28],
+      {
+        ratedFlow: litres(60),
+        ratedDrop: bar(0.5),
+        bypassPressure: bar(2),
+      },
+      { turn: 1 },
+    ),
+    part('T1', 'tank', [30, 40]),
+    part('T2', 'tank', [34, 40]),
+    part('T3', 'tank', [42, 40]),
+    part('T4', 'tank', [77, 40]),
   ],
   lines: [
     pipe('L1', 'T1.T', 'P1.suction', 0.6, 32),

@@ -95,12 +95,13 @@ export function chooseFit(request: FitRequest): Fit {
   let least = Number.POSITIVE_INFINITY;
   for (const view of views) {
     const fit = panelsIn(request, view);
-    const count = faults(request, fit) + (1 - view.zoom / (views[0]?.zoom ?? 1)) * 6;
+    const wrong = faults(request, fit);
+    const count = wrong + (1 - view.zoom / (views[0]?.zoom ?? 1)) * 6;
     if (count < least - 1e-9) {
       least = count;
       best = fit;
     }
-    if (size.width === 0) break;
+    if (size.width === 0 || wrong === 0) break;
   }
   return best ?? panelsIn(request, fitView(bodies.all, size.width, size.height, MOST_ZOOM, 2));
 }

@@ -64,7 +64,7 @@ function shaftBoxes(points: readonly Point[]): readonly Box[] {
   const boxes = points.slice(1).map((point, k) => segmentBox(points[k] as Point, point, 0.6));
   const a = points[0];
   const b = points[points.length - 1];
-  if (a && b && points.length === 2) boxes.push({ x: (a.x + b.x) / 2 - 1.2, y: (a.y + b.y) / 2 - 2.1, w: 2.2, h: 4 });
+  if (a && b && points.length === 2) boxes.push({ x: (a.x + b.x) / 2 - 1.2, y: (a.y + b.y) / 2 - 2.1, w: 2.2, h: 3.9 });
   return boxes;
 }
 
@@ -96,25 +96,17 @@ export function placeReadings(
   for (const spec of specs) {
     const w = (spec.width / 10) * grow;
     const h = (spec.height / 10) * grow;
-    let chosen: Box | null = null;
-    let least = Number.POSITIVE_INFINITY;
-    for (const { dx, dy } of spiral) {
-      const far = Math.hypot(dx, dy * 1.3);
-      if (far >= least) continue;
+    const chosen = spiral.find(({ dx, dy }) => {
       const box = { x: spec.wish.x + dx - w / 2, y: spec.wish.y + dy - h / 2, w, h };
-      if (frame && !within(box, frame)) continue;
+      if (frame && !within(box, frame)) return false;
       const grown = { x: box.x - 0.2, y: box.y - 0.2, w: w + 0.4, h: h + 0.4 };
-      if (
-        taken.some((other) => overlaps(grown, other)) ||
-        legs.some((leg) => legMeets(leg.a, leg.b, { ...grown, y: grown.y - 0.4, h: grown.h + 0.8 }))
-      )
-        continue;
-      least = far;
-      chosen = box;
-    }
+      const over = { ...grown, y: grown.y - 0.4, h: grown.h + 0.8 };
+      return !taken.some((other) => overlaps(grown, other)) && !legs.some((leg) => legMeets(leg.a, leg.b, over));
+    });
     if (!chosen) continue;
-    taken.push(chosen);
-    placed.set(spec.id, chosen);
+    const box = { x: spec.wish.x + chosen.dx - w / 2, y: spec.wish.y + chosen.dy - h / 2, w, h };
+    taken.push(box);
+    placed.set(spec.id, box);
   }
   return placed;
 }
@@ -122,7 +114,7 @@ export function placeReadings(
 const spiral: readonly { readonly dx: number; readonly dy: number }[] = (() => {
   const steps: { dx: number; dy: number }[] = [];
   for (let dx = -14; dx <= 14; dx += 1) for (let dy = -8; dy <= 8; dy += 1) steps.push({ dx, dy });
-  return steps.sort((a, b) => Math.hypot(a.dx, a.dy) - Math.hypot(b.dx, b.dy));
+  return steps.sort((a, b) => Math.hypot(a.dx, a.dy * 1.3) - Math.hypot(b.dx, b.dy * 1.3));
 })();
 
 function within(box: Box, frame: Box): boolean {
@@ -148,10 +140,16 @@ export function seatTags(
   bodies: Bodies,
   legs: readonly Leg[],
   readings: ReadonlyMap<string, Box>,
-  options: { readonly grow: number; readonly touch: boolean; readonly frame: Box | undefined; readonly blocked: readonly Box[] },
+  options: {
+    readonly grow: number;
+    readonly touch: boolean;
+    readonly frame: Box | undefined;
+    readonly blocked: readonly Box[];
+    readonly wheel?: boolean;
+  },
   before: ReadonlyMap<string, TagPlace> | null,
 ): ReadonlyMap<string, TagPlace> {
-  const { grow, touch, frame, blocked } = options;
+  const { grow, touch, frame, blocked, wheel } = options;
   const requests = wishes.map(({ spec, form, chipText, inHand }): TagRequest => {
     const pixels = tagSizes(touch, chipText);
     const size = (name: TagForm) => ({ w: (pixels[name].width / 10) * grow, h: (pixels[name].height / 10) * grow });
@@ -164,12 +162,12 @@ export function seatTags(
       sizes: { full: size('full'), compact: size('compact'), chip: size('chip') },
       dragged: dragged ? { dx: dragged.dx, dy: dragged.dy } : undefined,
       inHand,
-      insist: inHand && form === 'full',
+      insist: inHand && form === 'full' && !wheel,
       before: before?.get(spec.address),
     };
   });
-  const taken = [...[...bodies.byComponent.values()].flat(), ...bodies.words, ...readings.values(), ...blocked];
-  return placeTags(requests, { taken, legs, frame, grow });
+  const symbols = [...bodies.byComponent.values()].flat();
+  return placeTags(requests, { symbols, words: [...bodies.words, ...readings.values(), ...blocked], legs, frame, grow });
 }
 
 /** The view that shows everything: the whole drawing with some room, centred.

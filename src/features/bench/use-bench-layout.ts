@@ -103,7 +103,15 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
     if (before && before.text === text && before.sheet === sheet && before.readings === readings) return before.places;
     const steady = before && before.sheet === sheet ? before.places : null;
     const wishes = states.map(({ spec, form, chip }) => ({ spec, form, chipText: chip, inHand: inHand === spec.address }));
-    const next = seatTags(wishes, document, sheet.bodies, sheet.legs, readings, { grow, touch, frame, blocked }, steady);
+    const next = seatTags(
+      wishes,
+      document,
+      sheet.bodies,
+      sheet.legs,
+      readings,
+      { grow, touch, frame, blocked, wheel: options.wheel !== null },
+      steady,
+    );
     kept.current = { text, sheet, readings, places: next };
     keepPlaces(next);
     return next;
