@@ -4,7 +4,7 @@ import { emptyCircuit } from './edit/empty-circuit.ts';
 import { connect } from './edit/joins.ts';
 import { builtPress } from './edit/test-circuits.ts';
 import { flowOrder } from './flow-order.ts';
-import { allNextParts, nextParts } from './next-parts.ts';
+import { allNextParts, likelyJoin, nextParts } from './next-parts.ts';
 import { openPorts } from './open-ports.ts';
 
 const ref = (component: string, port: string) => ({ component, port });
@@ -55,6 +55,20 @@ describe('nextParts', () => {
       expect(allNextParts(builtPress(), port).length).toBeGreaterThan(0);
     }
     expect(allNextParts(pump, ref('p1', 'shaft')).map((part) => part.kind)).not.toContain('tank');
+  });
+});
+
+describe('likelyJoin', () => {
+  it('pairs a valve and a cylinder by letter and a motor with a pump, and nothing that is joined', () => {
+    let document = addComponent(emptyCircuit(), 'directional-valve-4-3', { x: 0, y: 20 }).document;
+    document = addComponent(document, 'cylinder', { x: 0, y: 0 }).document;
+    document = addComponent(document, 'compensated-pump', { x: 0, y: 40 }).document;
+    document = addComponent(document, 'electric-motor', { x: 0, y: 60 }).document;
+    expect(likelyJoin(document, ref('a1', 'B'))).toEqual(ref('v1', 'B'));
+    expect(likelyJoin(document, ref('p1', 'shaft'))).toEqual(ref('m1', 'shaft'));
+    expect(likelyJoin(document, ref('v1', 'P'))).toBeNull();
+    const joined = connect(document, ref('v1', 'B'), ref('a1', 'B')).document;
+    expect(likelyJoin(joined, ref('a1', 'B'))).toBeNull();
   });
 });
 

@@ -63,6 +63,26 @@ export function nextParts(document: CircuitDocument, ref: PortRef): NextParts {
   return { question: questionOf(document, ref, place), parts: offered.map((part) => ({ ...part, likely: part.kind === marked })) };
 }
 
+/** A port that is open already and that a person would most likely join to this one: a valve's A to a cylinder's A, a motor's
+ *  shaft to a pump that has none; null where there is no such obvious pair. */
+export function likelyJoin(document: CircuitDocument, ref: PortRef): PortRef | null {
+  const port = findPort(document, ref);
+  const kind = kindOfComponent(document, ref.component);
+  if (!port || !kind || !isOpen(document, ref)) return null;
+  for (const component of document.components) {
+    const other = findKind(component.kind);
+    if (component.id === ref.component || !other || (other.stage === kind.stage && port.medium === 'oil')) continue;
+    for (const entry of other.ports) {
+      const match =
+        port.medium === 'shaft'
+          ? entry.medium === 'shaft' && other.stage !== kind.stage
+          : isWorkPort(kind, port) && isWorkPort(other, entry) && entry.letter === port.letter;
+      if (match && isOpen(document, { component: component.id, port: entry.id })) return { component: component.id, port: entry.id };
+    }
+  }
+  return null;
+}
+
 /** Every kind that has a port of the same medium, in the registry's order: behind "all parts". */
 export function allNextParts(document: CircuitDocument, ref: PortRef): NextPart[] {
   const port = findPort(document, ref);
@@ -166,10 +186,6 @@ function likelyKind(document: CircuitDocument, ref: PortRef, place: Place): stri
     return other ? 'junction' : 'directional-valve-4-3';
   }
   return place === 'inlet' ? 'compensated-pump' : 'junction';
-}
-
-function hasOpenWorkPort(document: CircuitDocument, id: string): boolean {
-  return ['A', 'B'].some((port) => isOpen(document, { component: id, port }));
 }
 
 function questionOf(document: CircuitDocument, ref: PortRef, place: Place): string {

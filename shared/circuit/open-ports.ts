@@ -8,8 +8,8 @@ export interface OpenPort extends PortRef {
   readonly spec: PortSpec;
 }
 
-/** Ports without line or shaft, in flow order. A junction shows one open arm at most: the next free one; with two or more
- *  lines it is complete and `optional`, a place where one may still branch. */
+/** Ports without line or shaft, in flow order. A junction shows one open arm at most, the next free one; with three lines it
+ *  is complete and `optional`: a place where one may still branch. */
 export function openPorts(document: CircuitDocument): (OpenPort & { readonly optional: boolean })[] {
   return flowOrder(document).flatMap((id) => {
     const component = findComponent(document, id);
@@ -25,7 +25,7 @@ export function openPorts(document: CircuitDocument): (OpenPort & { readonly opt
         const found = kind.ports.find((port) => port.id === arm.port);
         if (!found || !isOpen(document, arm)) return [];
         const lines = document.lines.filter((line) => line.from.component === id || line.to.component === id).length;
-        return [{ ...arm, spec: found, optional: lines >= 2 }];
+        return [{ ...arm, spec: found, optional: lines >= 3 }];
       }
       return isOpen(document, ref) ? [{ ...ref, spec, optional: false }] : [];
     });

@@ -20,7 +20,7 @@ export interface Grown {
 const hanging: readonly string[] = ['relief-valve', 'pressure-gauge'];
 /** How far a junction stands off the port it grows from: first out of the port, then to the right. */
 const OUT = 4;
-const OVER = 8;
+const OVER = 12;
 
 const refused = (document: CircuitDocument, problem: string): Grown => ({ document, componentId: null, problem });
 
@@ -69,7 +69,7 @@ function hangBehind(document: CircuitDocument, ref: PortRef, from: Point, side: 
 }
 
 /** From a junction's open arm that suits the part: below for what is entered from the top, above for what is entered from
- *  below, else onward. The last arm but one of a hanging part gets a further junction, so that the line stays open. */
+ *  below, else onward. A part that hangs on a tee that already has two lines gets a further tee, so that the line stays open. */
 function growFromJunction(document: CircuitDocument, junctionId: string, kindId: string, entry: string): Grown {
   const symbol = symbolOf(kindId);
   const entrySide = symbol?.ports[entry]?.side ?? 'left';
@@ -81,7 +81,12 @@ function growFromJunction(document: CircuitDocument, junctionId: string, kindId:
   const ref = { component: junctionId, port: arm };
   const place = portPlace(document, ref);
   if (!place) return refused(document, 'That port is not on the drawing.');
-  if (hangs && (arm === 'a' || arm === 'b')) return hangBehind(document, ref, place, place.side, kindId, entry);
+  const lines = document.lines.filter((line) => line.from.component === junctionId || line.to.component === junctionId).length;
+  if (hangs && (lines >= 2 || arm === 'a' || arm === 'b')) {
+    const onward = ['b', 'a', 'd', 'c'].map((port) => ({ component: junctionId, port })).find((end) => isOpen(document, end)) ?? ref;
+    const from = portPlace(document, onward) ?? place;
+    return hangBehind(document, onward, from, from.side, kindId, entry);
+  }
   return addAt(document, ref, place, place.side, kindId, entry);
 }
 

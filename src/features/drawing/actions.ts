@@ -1,5 +1,6 @@
 import { addComponent, mirrorParts, moveParts, turnParts } from '#shared/circuit/edit/components.ts';
 import { copyParts, duplicateParts, pasteParts } from '#shared/circuit/edit/copy.ts';
+import { addCommand } from '#shared/circuit/edit/duty.ts';
 import { growFrom, putDown } from '#shared/circuit/edit/grow.ts';
 import { connect, connectToLine, isOpen, leaveShaft, lineAt } from '#shared/circuit/edit/joins.ts';
 import { portPlace, sideSteps } from '#shared/circuit/edit/place-parts.ts';
@@ -7,7 +8,7 @@ import { chosenInWords, planRemoval, removalList, removeItems } from '#shared/ci
 import { seatJunction } from '#shared/circuit/edit/seat-junction.ts';
 import { addNote } from '#shared/circuit/edit/sheet.ts';
 import { listInWords } from '#shared/circuit/in-words.ts';
-import { findComponent, findKind, nameInWords, portInWords } from '#shared/circuit/kind-lookup.ts';
+import { findComponent, findKind, kindOfComponent, nameInWords, portInWords } from '#shared/circuit/kind-lookup.ts';
 import { openPorts } from '#shared/circuit/open-ports.ts';
 import type { CircuitDocument, PortRef } from '#shared/circuit/schema.ts';
 import { useDocument } from '#src/stores/document-store.ts';
@@ -30,30 +31,45 @@ export function growAt(ref: PortRef, kind: string) {
   const grown = growFrom(present(), ref, kind);
   if (!grown.componentId) return say(grown.problem ?? 'That cannot be joined there.');
   const where = portInWords(present(), ref);
-  put(grown.document);
+  const flagged = withFirstFlags(grown.document, grown.componentId);
+  put(flagged.document);
   const open = openPorts(grown.document).filter((port) => !port.optional);
-  const next =
-    open.find((port) => port.component === grown.componentId) ?? openPorts(grown.document).find((port) => isOnNewLine(port)) ?? open[0];
+  const next = open.find((port) => port.component === grown.componentId) ?? open[0];
   draw({
     strip: null,
     preview: null,
     focus: next ? portFocus(next) : partFocus(grown.componentId),
-    said: `${called(grown.document, grown.componentId)} joined to ${where}`,
+    said: `${called(grown.document, grown.componentId)} joined to ${where}${flagged.words}`,
   });
   useDocument.getState().select([]);
-
-  function isOnNewLine(port: PortRef): boolean {
-    return findComponent(grown.document, port.component)?.kind === 'junction' && !findComponent(present(), port.component);
-  }
 }
 
 /** A part from the drawer. With `exact` its top-left stands there, else at the nearest free place. */
 export function placePart(kind: string, at: { x: number; y: number }, exact: boolean) {
-  const put1 = putDown(present(), kind, at, exact);
-  if (!put1.componentId) return say(put1.problem ?? 'There is no room on the sheet.');
-  put(put1.document);
-  useDocument.getState().select([put1.componentId]);
-  draw({ placing: null, focus: partFocus(put1.componentId), said: `${called(put1.document, put1.componentId)} placed` });
+  const { document, componentId, problem } = putDown(present(), kind, at, exact);
+  if (!componentId) return say(problem ?? 'There is no room on the sheet.');
+  const flagged = withFirstFlags(document, componentId);
+  put(flagged.document);
+  useDocument.getState().select([componentId]);
+  draw({ placing: null, focus: partFocus(componentId), said: `${called(document, componentId)} placed${flagged.words}` });
+}
+
+/** A valve that nothing shifts would leave a new circuit standing still: the first one gets its flags, there and back, and it is
+ *  said so. They are ordinary flags on the tape from then on. */
+function withFirstFlags(document: CircuitDocument, id: string): { document: CircuitDocument; words: string } {
+  const spool = kindOfComponent(document, id)?.inputs.find((input) => input.id === 'spool');
+  if (!spool || document.duty.commands.some((command) => command.input === 'spool')) return { document, words: '' };
+  const { duration } = document.duty;
+  const times = [0.1 * duration, 0.6 * duration];
+  const values = [spool.max, spool.min];
+  let flagged = document;
+  for (const [index, time] of times.entries()) {
+    flagged = addCommand(flagged, { time, target: id, input: 'spool', value: values[index] ?? 0 }).document;
+  }
+  return {
+    document: flagged,
+    words: `; two flags on the tape shift it, at ${times.map((time) => Number(time.toFixed(2))).join(' and ')} s`,
+  };
 }
 
 /** Joins two ports; an end that is taken is branched near its port. */

@@ -10,6 +10,7 @@ import { useDocument } from '#src/stores/document-store.ts';
 import { openNameplate } from '#src/stores/nameplate-store.ts';
 import { writeNote } from './actions.ts';
 import { useDrawing } from './drawing-store.ts';
+import { fitSheet } from './fit-sheet.ts';
 import { MODULE } from './flow-model.ts';
 import { keyOf } from './problem-slips.tsx';
 import { applyCure, useDrawingProblems } from './problems.ts';
@@ -36,15 +37,15 @@ export function DrawBar({ room }: { readonly room: { readonly width: number; rea
       <button type="button" className="button" onClick={() => writeNote(middle())}>
         Note
       </button>
-      <span className="zoom-buttons">
+      <span className="sheet-zoom">
         <button type="button" className="button button-square" aria-label="Zoom out" onClick={() => void flow.zoomOut()}>
           −
         </button>
-        <span className="zoom-figure reading">{Math.round(zoom * 100)} %</span>
+        <span className="sheet-zoom-figure reading">{Math.round(zoom * 100)} %</span>
         <button type="button" className="button button-square" aria-label="Zoom in" onClick={() => void flow.zoomIn()}>
           +
         </button>
-        <button type="button" className="button" onClick={() => void flow.fitView({ padding: 0.16, maxZoom: 1.4 })}>
+        <button type="button" className="button" onClick={() => fitSheet(flow, room)}>
           Fit
         </button>
       </span>

@@ -6,6 +6,7 @@ import { useDocument } from '#src/stores/document-store.ts';
 import { DrawBar } from './draw-bar.tsx';
 import { useDrawing } from './drawing-store.ts';
 import { EmptySheet } from './empty-sheet.tsx';
+import { fitSheet, keepInView } from './fit-sheet.ts';
 import { NextStrip } from './next-strip.tsx';
 import { PartsDrawer } from './parts-drawer.tsx';
 import { ProblemSlips } from './problem-slips.tsx';
@@ -22,14 +23,12 @@ export function DrawStage({ children }: { readonly children?: ReactNode }) {
   );
 }
 
-const fit = { padding: 0.16, maxZoom: 1.4 };
-
 function Stage({ children }: { readonly children?: ReactNode }) {
   const [sheet, room] = useSize<HTMLDivElement>();
   const flow = useReactFlow();
   const empty = useDocument((state) => state.document.components.length === 0 && state.document.notes.length === 0);
   const said = useDrawing((state) => state.said);
-  const keys = useDrawKeys({ in: () => void flow.zoomIn(), out: () => void flow.zoomOut(), fit: () => void flow.fitView(fit) });
+  const keys = useDrawKeys({ in: () => void flow.zoomIn(), out: () => void flow.zoomOut(), fit: () => fitSheet(flow, room) });
   useFocusWhenDrawn(sheet);
   useEffect(
     () => () =>
@@ -38,24 +37,36 @@ function Stage({ children }: { readonly children?: ReactNode }) {
         .set({ strip: null, preview: null, placing: null, deletion: null, writing: null, joinFrom: null, said: '', focus: null }),
     [],
   );
-  const refit = () => setTimeout(() => void flow.fitView(fit), 60);
+  const ready = room.width > 0;
+  // biome-ignore lint/correctness/useExhaustiveDependencies: fitted once, when the sheet has its size
+  useEffect(() => {
+    if (ready) fitSheet(flow, room);
+  }, [ready]);
+
+  const count = useDocument((state) => state.document.components.length);
+  const before = useRef(count);
+  // biome-ignore lint/correctness/useExhaustiveDependencies: only a part that was added moves the view
+  useEffect(() => {
+    if (count > before.current) keepInView(flow, room);
+    before.current = count;
+  }, [count]);
 
   return (
-    <main className="draw-stage">
+    <div className="drawing-stage">
       <DrawBar room={room} />
       <section ref={sheet} className="draw-sheet" aria-label="The sheet" tabIndex={-1} {...keys}>
         <Sheet />
         <ProblemSlips />
         <SelectionTools width={room.width} height={room.height} />
         <NextStrip width={room.width} height={room.height} />
-        {empty && <EmptySheet onTaken={refit} />}
+        {empty && <EmptySheet onTaken={() => fitSheet(flow, room)} />}
         {children}
       </section>
       <PartsDrawer room={room} />
       <p className="visually-hidden" aria-live="polite">
         {said}
       </p>
-    </main>
+    </div>
   );
 }
 

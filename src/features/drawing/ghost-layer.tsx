@@ -1,5 +1,5 @@
 import { useMemo } from 'react';
-import { EdgeLabelRenderer } from 'reactflow';
+import { EdgeLabelRenderer, useViewport } from 'reactflow';
 import { growFrom } from '#shared/circuit/edit/grow.ts';
 import type { CircuitDocument } from '#shared/circuit/schema.ts';
 import { endOf } from '#shared/pictures/line-ends.ts';
@@ -53,6 +53,7 @@ function Ghost({ before, after, words, focus, dotted }: GhostProps) {
   const { parts, lines, shafts } = useMemo(() => added(before, after), [before, after]);
   const joined = useMemo(() => joinedPorts(after), [after]);
   const chosen = parts.find((part) => part.id === focus);
+  const { zoom } = useViewport();
   const size = chosen && symbolOf(chosen.kind);
   const box = chosen && size && placedSize(size, chosen.turn);
   return (
@@ -71,7 +72,10 @@ function Ghost({ before, after, words, focus, dotted }: GhostProps) {
         </g>
       </svg>
       {words && chosen && box && (
-        <span className="ghost-words" style={{ left: chosen.at.x * MODULE, top: (chosen.at.y + box.height) * MODULE + 4 }}>
+        <span
+          className="ghost-words"
+          style={{ left: chosen.at.x * MODULE, top: (chosen.at.y + box.height) * MODULE + 4, transform: `scale(${1 / zoom})` }}
+        >
           {words}
         </span>
       )}

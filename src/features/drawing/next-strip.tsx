@@ -3,7 +3,7 @@ import { useViewport } from 'reactflow';
 import { isOpen } from '#shared/circuit/edit/joins.ts';
 import { portPlace } from '#shared/circuit/edit/place-parts.ts';
 import { portInWords } from '#shared/circuit/kind-lookup.ts';
-import { allNextParts, nextParts } from '#shared/circuit/next-parts.ts';
+import { allNextParts, likelyJoin, nextParts } from '#shared/circuit/next-parts.ts';
 import type { CircuitDocument, PortRef } from '#shared/circuit/schema.ts';
 import { Icon } from '#src/components/icons.tsx';
 import { SymbolIcon } from '#src/components/schematic/symbol-icon.tsx';
@@ -65,15 +65,17 @@ function OpenStrip({ portRef, list, document, place, room }: OpenStripProps) {
     const element = box.current;
     if (element) setSize({ width: element.offsetWidth, height: element.offsetHeight });
   }, []);
+  const drawn = size.width > 0;
   useEffect(() => {
+    if (!drawn) return;
     box.current?.querySelector<HTMLElement>(`[data-choice="${index}"]`)?.focus({ preventScroll: true });
-  }, [index]);
+  }, [index, drawn]);
   useEffect(() => set({ preview: choice?.kind ?? null }), [set, choice]);
 
   const at = { x: x + place.x * MODULE * zoom, y: y + place.y * MODULE * zoom };
-  const above = at.y - size.height - 30;
   const left = Math.max(8, Math.min(room.width - size.width - 8, at.x - size.width * 0.45));
-  const top = above >= 8 ? above : Math.min(room.height - size.height - 8, at.y + 30);
+  const above = at.y > size.height + 26;
+  const top = above ? Math.max(8, at.y - size.height - 70) : Math.min(room.height - size.height - 8, at.y + 60);
 
   function handleKey(event: KeyboardEvent) {
     const many = choices.length;
@@ -97,42 +99,48 @@ function OpenStrip({ portRef, list, document, place, room }: OpenStripProps) {
   }
 
   return (
-    <div
-      ref={box}
-      className={`strip strip-${list}`}
-      role="menu"
-      aria-label={question}
-      tabIndex={-1}
-      style={{ left, top, visibility: size.width === 0 ? 'hidden' : undefined }}
-      onKeyDown={handleKey}
-    >
-      <div className="strip-head" role="presentation">
-        <span>{question}</span>
-        {list === 'next' && <span className="strip-hint">or drag to another ring</span>}
+    <>
+      <span
+        className="strip-leader"
+        style={{ left: at.x, top: above ? top + size.height : at.y + 12, height: above ? at.y - 12 - top - size.height : top - at.y - 12 }}
+      />
+      <div
+        ref={box}
+        className={`strip strip-${list}`}
+        role="menu"
+        aria-label={question}
+        tabIndex={-1}
+        style={{ left, top, opacity: drawn ? undefined : 0 }}
+        onKeyDown={handleKey}
+      >
+        <div className="strip-head" role="presentation">
+          <span>{question}</span>
+          {list === 'next' && <span className="strip-hint">or drag to another ring</span>}
+        </div>
+        <div className="strip-choices" role="presentation">
+          {choices.map((entry, at) => (
+            <button
+              key={entry.id}
+              type="button"
+              role="menuitem"
+              className="strip-choice"
+              data-choice={at}
+              data-likely={entry.likely || undefined}
+              tabIndex={at === index ? 0 : -1}
+              aria-label={entry.likely ? `${entry.words}, likeliest` : entry.words}
+              onClick={entry.take}
+              onFocus={() => setIndex(at)}
+              onPointerEnter={(event) => event.pointerType === 'mouse' && setIndex(at)}
+            >
+              {entry.kind && list !== 'join' && <SymbolIcon kind={entry.kind} width={70} height={44} />}
+              {entry.mark && <StripMark mark={entry.mark} />}
+              <span>{entry.words}</span>
+            </button>
+          ))}
+          {choices.length === 0 && <p className="strip-none">Nothing on the sheet can be joined here yet.</p>}
+        </div>
       </div>
-      <div className="strip-choices" role="presentation">
-        {choices.map((entry, at) => (
-          <button
-            key={entry.id}
-            type="button"
-            role="menuitem"
-            className="strip-choice"
-            data-choice={at}
-            data-likely={entry.likely || undefined}
-            tabIndex={at === index ? 0 : -1}
-            aria-label={entry.likely ? `${entry.words}, likeliest` : entry.words}
-            onClick={entry.take}
-            onFocus={() => setIndex(at)}
-            onPointerEnter={(event) => event.pointerType === 'mouse' && setIndex(at)}
-          >
-            {entry.kind && list !== 'join' && <SymbolIcon kind={entry.kind} width={70} height={44} />}
-            {entry.mark && <StripMark mark={entry.mark} />}
-            <span>{entry.words}</span>
-          </button>
-        ))}
-        {choices.length === 0 && <p className="strip-none">Nothing on the sheet can be joined here yet.</p>}
-      </div>
-    </div>
+    </>
   );
 }
 
@@ -160,7 +168,16 @@ function choicesAt(document: CircuitDocument, ref: PortRef, list: 'next' | 'all'
   if (list === 'all') return { question: 'All parts', choices: [...allNextParts(document, ref).map(part), back] };
   const next = nextParts(document, ref);
   const open = isOpen(document, ref);
-  const choices: Choice[] = next.parts.map(part);
+  const pair = likelyJoin(document, ref);
+  const choices: Choice[] = next.parts.map((entry) => part(pair ? { ...entry, likely: false } : entry));
+  if (pair)
+    choices.unshift({
+      id: 'pair',
+      words: `join to ${portInWords(document, pair)}`,
+      mark: 'join',
+      likely: true,
+      take: () => joinPorts(ref, pair),
+    });
   choices.push({ id: 'all', words: 'all parts', mark: 'more', take: () => openStrip(ref, 'all') });
   choices.push({ id: 'join', words: 'join to…', mark: 'join', take: () => openStrip(ref, 'join') });
   if (!open) choices.push({ id: 'cut', words: 'take apart', mark: 'cut', take: () => takeApart(ref) });

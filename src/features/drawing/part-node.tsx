@@ -52,7 +52,7 @@ export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps
         aria-hidden="true"
       >
         <SymbolView component={component} values={values} joined={joined} live={false} />
-        {component.name && component.kind !== 'tank' && (
+        {component.name && component.kind !== 'tank' && component.kind !== 'junction' && (
           <text x={code.x} y={code.y} className="part-code">
             {component.name}
           </text>

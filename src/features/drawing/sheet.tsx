@@ -31,7 +31,6 @@ const nodeTypes = { part: PartNode, note: NoteNode, label: LabelNode };
 const edgeTypes = { line: LineEdge, shaft: ShaftEdge };
 const snapGrid: [number, number] = [MODULE, MODULE];
 const proOptions = { hideAttribution: true };
-const fitView = { padding: 0.16, maxZoom: 1.4 };
 /** A press that moves less than this [px] is a press, not a drag. */
 const PRESS = 6;
 
@@ -115,8 +114,6 @@ export function Sheet() {
       snapGrid={snapGrid}
       minZoom={0.25}
       maxZoom={2.5}
-      fitView={document.components.length > 0}
-      fitViewOptions={fitView}
       nodesFocusable={false}
       edgesFocusable={false}
       disableKeyboardA11y
