@@ -88,6 +88,6 @@ function verdictFigure(context: FindingContext, id: VerdictId, finding: Finding)
   if (id === 'trips' && drive?.yardsticks.tripTime != null) return figure(drive.yardsticks.tripTime, 'time', { digits: 0 });
   if (id === 'relief-passing' && finding.at) return figure(finding.at.flow, 'flow');
   if (id === 'over' && drive) return figure(drive.yardsticks.rmsCurrent, 'fraction', { digits: 0 });
-  if (id === 'rod-stops-short') return figure(context.at(`${finding.component}.position`, finding.time ?? 0), 'length');
+  if (id === 'rod-stops-short') return finding.headline.find((part): part is Figure => typeof part !== 'string') ?? null;
   return id === 'failed' ? figure(context.run.time, 'time', { digits: 1 }) : null;
 }

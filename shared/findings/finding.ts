@@ -125,9 +125,11 @@ export interface Yardsticks {
   readonly stallCurrent?: number;
   /** RMS current over the repeated duty ÷ nameplate current. */
   readonly rmsCurrent: number;
+  /** RMS torque over the repeated duty ÷ rated torque. */
   readonly rmsTorque: number;
   /** Peak torque ÷ rated torque. */
   readonly peakTorque: number;
+  /** Highest current after run-up [A]. */
   readonly peakCurrent: number;
   /** Time to trip on the repeated duty [s]; null = never. */
   readonly tripTime: number | null;

@@ -63,7 +63,7 @@ function driveLoad(base: Base, motor: string, facts: MotorFacts): DriveLoad {
     rmsCurrent: rmsCurrent / facts.ratedCurrent,
     rmsTorque: rmsTorque / facts.ratedTorque,
     peakTorque: peakTorque / facts.ratedTorque,
-    peakCurrent: Math.max(0, highest(times, current, window).value) / facts.ratedCurrent,
+    peakCurrent: Math.max(0, highest(times, current, window).value),
     tripTime: relayTime(base, motor, facts, load, stall),
   };
   return {

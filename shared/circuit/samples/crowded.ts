@@ -75,11 +75,17 @@ export const crowdedCircuit: CircuitDocument = sample({
       },
     ),
     part('V1', 'check-valve', [22, 26]),
-    part('Z1', 'filter', [27, 23], {
-      ratedFlow: litres(60),
-      ratedDrop: bar(1),
-      bypassPressure: bar(6),
-    }),
+    part(
+      'Z1',
+      'filter',
+      [27, 25],
+      {
+        ratedFlow: litres(60),
+        ratedDrop: bar(1),
+        bypassPressure: bar(6),
+      },
+      { turn: 2, mirror: true },
+    ),
     part('J1', 'junction', [37, 26], {
       shape: choice('tee'),
     }),
@@ -112,15 +118,15 @@ export const crowdedCircuit: CircuitDocument = sample({
       },
       { turn: 2 },
     ),
-    part('J3', 'junction', [45, 26], {
+    part('J3', 'junction', [43, 26], {
       shape: choice('tee'),
     }),
-    part('V3', 'directional-valve-4-3', [61, 21], {
+    part('V3', 'directional-valve-4-3', [68, 20], {
       centre: choice('closed'),
       ratedFlow: litres(60),
       ratedDrop: bar(5),
     }),
-    part('A1', 'cylinder', [53, 3], {
+    part('A1', 'cylinder', [60, 3], {
       bore: millimetres(63),
       rod: millimetres(36),
       stroke: millimetres(500),
@@ -131,42 +137,42 @@ export const crowdedCircuit: CircuitDocument = sample({
       workSpringback: percent(2),
       ratedPressure: bar(250),
     }),
-    part('V5', 'directional-valve-4-3', [38, 21], {
+    part('V5', 'directional-valve-4-3', [36, 20], {
       centre: choice('closed'),
       ratedFlow: litres(60),
       ratedDrop: bar(5),
     }),
-    part('V4', 'throttle', [34, 15], {
+    part('V4', 'throttle', [34, 14], {
       opening: percent(25),
       ratedFlow: litres(60),
       ratedDrop: bar(6),
     }),
-    part('J4', 'junction', [68, 14], {
+    part('J4', 'junction', [75, 14], {
       shape: choice('tee'),
     }),
     part(
       'S2',
       'pressure-gauge',
-      [76, 12],
+      [83, 12],
       {
         range: bar(250),
         lag: milliseconds(50),
       },
       { turn: 1 },
     ),
-    part('A2', 'cylinder', [6, 8], {
+    part('A2', 'cylinder', [6, 7], {
       bore: millimetres(40),
       rod: millimetres(22),
       stroke: millimetres(200),
       mass: kilograms(25),
       ratedPressure: bar(250),
     }),
-    part('J5', 'junction', [70, 37], { shape: choice('tee') }),
+    part('J5', 'junction', [77, 37], { shape: choice('tee') }),
     part('S3', 'flow-meter', [55, 24.5], {
       ratedFlow: litres(60),
       ratedDrop: bar(1),
     }),
-    part('Z2', 'filter', [84, 34], {
+    part('Z2', 'filter', [88, 34], {
       ratedFlow: litres(60),
       ratedDrop: bar(0.5),
       bypassPressure: bar(2),
@@ -174,7 +180,7 @@ export const crowdedCircuit: CircuitDocument = sample({
     part('T1', 'tank', [18, 41]),
     part('T2', 'tank', [22, 41]),
     part('T3', 'tank', [36, 41]),
-    part('T4', 'tank', [94, 41]),
+    part('T4', 'tank', [99, 41]),
   ],
   lines: [
     pipe('L1', 'T1.T', 'P1.suction', 0.6, 32),
@@ -195,8 +201,8 @@ export const crowdedCircuit: CircuitDocument = sample({
     pipe('L15', 'J4.b', 'S2.M', 0.5, 4),
     pipe('L16', 'A1.B', 'V3.B', 1.5, 16),
     pipe('L17', 'V5.A', 'A2.A', 2, 12, [
-      { x: 46, y: 20 },
-      { x: 8, y: 20 },
+      { x: 44, y: 19 },
+      { x: 8, y: 19 },
     ]),
     pipe('L18', 'A2.B', 'V4.A', 1, 12),
     pipe('L19', 'V4.B', 'V5.B', 1, 12),

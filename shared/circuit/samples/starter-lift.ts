@@ -20,22 +20,22 @@ import { motor, PUMP_SCREWS, pump, RELIEF_SCREW, relief, valve } from './sample-
 export const liftStarter = sample({
   title: 'Lift against gravity',
   components: [
-    part('M1', 'electric-motor', [6, 29], motor(4, 8.5)),
-    part('P1', 'compensated-pump', [20, 26], pump(18, 14, 130), PUMP_SCREWS),
-    part('V1', 'check-valve', [34, 23]),
-    part('J1', 'junction', [41, 23], {
+    part('M1', 'electric-motor', [9, 29], motor(4, 8.5)),
+    part('P1', 'compensated-pump', [24, 26], pump(18, 14, 130), PUMP_SCREWS),
+    part('V1', 'check-valve', [37, 24]),
+    part('J1', 'junction', [43, 24], {
       shape: choice('tee'),
     }),
-    part('V2', 'relief-valve', [39, 29], relief('pilot', 155, 25), RELIEF_SCREW),
-    part('J2', 'junction', [47, 23], {
+    part('V2', 'relief-valve', [41, 28], relief('pilot', 155, 25), RELIEF_SCREW),
+    part('J2', 'junction', [57, 24], {
       shape: choice('tee'),
     }),
-    part('S1', 'pressure-gauge', [45, 15], {
+    part('S1', 'pressure-gauge', [55, 17], {
       range: bar(250),
       lag: milliseconds(50),
     }),
-    part('V3', 'directional-valve-4-3', [58, 18], valve('closed')),
-    part('V4', 'throttle', [72, 8], {
+    part('V3', 'directional-valve-4-3', [69, 18], valve('closed')),
+    part('V4', 'throttle', [82, 8], {
       opening: percent(30),
       ratedFlow: litres(60),
       ratedDrop: bar(6),
@@ -43,7 +43,7 @@ export const liftStarter = sample({
     part(
       'A1',
       'cylinder',
-      [88, 23],
+      [96, 23],
       {
         bore: millimetres(50),
         rod: millimetres(28),
@@ -54,10 +54,10 @@ export const liftStarter = sample({
       },
       { turn: 1, mirror: true },
     ),
-    part('T1', 'tank', [26, 40]),
-    part('T2', 'tank', [30, 40]),
-    part('T3', 'tank', [40, 40]),
-    part('T4', 'tank', [66, 40]),
+    part('T1', 'tank', [30, 40]),
+    part('T2', 'tank', [34, 40]),
+    part('T3', 'tank', [42, 40]),
+    part('T4', 'tank', [77, 40]),
   ],
   lines: [
     pipe('L1', 'T1.T', 'P1.suction', 0.6, 32),
@@ -69,15 +69,15 @@ export const liftStarter = sample({
     pipe('L7', 'J1.b', 'J2.a', 0.5, 16),
     pipe('L8', 'J2.d', 'S1.M', 0.5, 4),
     pipe('L9', 'J2.b', 'V3.P', 2.5, 16),
-    pipe('L10', 'V3.A', 'V4.A', 0.5, 16, [{ x: 66, y: 10 }]),
+    pipe('L10', 'V3.A', 'V4.A', 0.5, 16, [{ x: 77, y: 10 }]),
     pipe('L11', 'V4.B', 'A1.A', 1, 16, [
-      { x: 81, y: 10 },
-      { x: 81, y: 41 },
+      { x: 90, y: 10 },
+      { x: 90, y: 41 },
     ]),
     pipe('L12', 'A1.B', 'V3.B', 2, 16, [
-      { x: 84, y: 25 },
-      { x: 84, y: 14 },
-      { x: 68, y: 14 },
+      { x: 93, y: 25 },
+      { x: 93, y: 14 },
+      { x: 79, y: 14 },
     ]),
     pipe('L13', 'V3.T', 'T4.T', 1.5, 20),
   ],

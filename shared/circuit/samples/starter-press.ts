@@ -20,22 +20,22 @@ import { motor, PUMP_SCREWS, pump, RELIEF_SCREW, relief, valve } from './sample-
 export const pressStarter = sample({
   title: 'Press with compensated pump',
   components: [
-    part('M1', 'electric-motor', [6, 29], motor(7.5, 15)),
-    part('P1', 'compensated-pump', [20, 26], pump(28, 24, 160), PUMP_SCREWS),
-    part('V1', 'check-valve', [34, 23]),
-    part('J1', 'junction', [41, 23], {
+    part('M1', 'electric-motor', [9, 29], motor(7.5, 15)),
+    part('P1', 'compensated-pump', [24, 26], pump(28, 24, 160), PUMP_SCREWS),
+    part('V1', 'check-valve', [37, 24]),
+    part('J1', 'junction', [43, 24], {
       shape: choice('tee'),
     }),
-    part('V2', 'relief-valve', [39, 29], relief('pilot', 190, 35), RELIEF_SCREW),
-    part('J2', 'junction', [47, 23], {
+    part('V2', 'relief-valve', [41, 28], relief('pilot', 190, 35), RELIEF_SCREW),
+    part('J2', 'junction', [57, 24], {
       shape: choice('tee'),
     }),
-    part('S1', 'pressure-gauge', [45, 15], {
+    part('S1', 'pressure-gauge', [55, 17], {
       range: bar(250),
       lag: milliseconds(50),
     }),
-    part('V3', 'directional-valve-4-3', [61, 18], valve('tandem')),
-    part('A1', 'cylinder', [53, 4], {
+    part('V3', 'directional-valve-4-3', [69, 18], valve('tandem')),
+    part('A1', 'cylinder', [61, 4], {
       bore: millimetres(80),
       rod: millimetres(45),
       stroke: millimetres(400),
@@ -46,15 +46,21 @@ export const pressStarter = sample({
       workSpringback: percent(2),
       ratedPressure: bar(250),
     }),
-    part('Z1', 'filter', [69, 28], {
-      ratedFlow: litres(60),
-      ratedDrop: bar(0.5),
-      bypassPressure: bar(2),
-    }),
-    part('T1', 'tank', [26, 40]),
-    part('T2', 'tank', [30, 40]),
-    part('T3', 'tank', [40, 40]),
-    part('T4', 'tank', [69, 40]),
+    part(
+      'Z1',
+      'filter',
+      [77, 28],
+      {
+        ratedFlow: litres(60),
+        ratedDrop: bar(0.5),
+        bypassPressure: bar(2),
+      },
+      { turn: 1 },
+    ),
+    part('T1', 'tank', [30, 40]),
+    part('T2', 'tank', [34, 40]),
+    part('T3', 'tank', [42, 40]),
+    part('T4', 'tank', [77, 40]),
   ],
   lines: [
     pipe('L1', 'T1.T', 'P1.suction', 0.6, 32),

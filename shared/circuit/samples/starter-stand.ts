@@ -5,32 +5,32 @@ import { motor, PUMP_SCREWS, pump, RELIEF_SCREW, relief } from './sample-plates.
 export const standStarter = sample({
   title: 'Test stand, pump on relief',
   components: [
-    part('M1', 'electric-motor', [6, 29], motor(11, 21)),
-    part('P1', 'compensated-pump', [20, 26], pump(28, 28, 200), PUMP_SCREWS),
-    part('J1', 'junction', [33, 23], {
+    part('M1', 'electric-motor', [9, 29], motor(11, 21)),
+    part('P1', 'compensated-pump', [24, 26], pump(28, 28, 200), PUMP_SCREWS),
+    part('J1', 'junction', [39, 24], {
       shape: choice('tee'),
     }),
-    part('S1', 'pressure-gauge', [31, 15], {
+    part('S1', 'pressure-gauge', [37, 16], {
       range: bar(250),
       lag: milliseconds(50),
     }),
-    part('J2', 'junction', [45, 23], {
+    part('J2', 'junction', [51, 24], {
       shape: choice('tee'),
     }),
-    part('V1', 'relief-valve', [43, 29], relief('direct', 150, 40), RELIEF_SCREW),
-    part('V2', 'throttle', [58, 22], {
+    part('V1', 'relief-valve', [49, 29], relief('direct', 150, 40), RELIEF_SCREW),
+    part('V2', 'throttle', [62, 23], {
       opening: percent(100),
       ratedFlow: litres(80),
       ratedDrop: bar(6),
     }),
-    part('S2', 'flow-meter', [70, 21.5], {
+    part('S2', 'flow-meter', [74, 22.5], {
       ratedFlow: litres(60),
       ratedDrop: bar(1),
     }),
-    part('T1', 'tank', [26, 40]),
-    part('T2', 'tank', [30, 40]),
-    part('T3', 'tank', [44, 40]),
-    part('T4', 'tank', [82, 32]),
+    part('T1', 'tank', [30, 40]),
+    part('T2', 'tank', [34, 40]),
+    part('T3', 'tank', [50, 40]),
+    part('T4', 'tank', [86, 32]),
   ],
   lines: [
     pipe('L1', 'T1.T', 'P1.suction', 0.6, 32),

@@ -14,11 +14,9 @@ export function rodRules(context: FindingContext): Finding[] {
 }
 
 const REST_TIME = 0.3;
-/** With less on the commanded side while another rod moves, the oil goes there first [Pa]. */
-const FILLED = 5e5;
 /** At an end: within this of it [m]. */
 const END = 1e-3;
-/** Another rod moves above this [m/s]. */
+/** While another rod moves above this [m/s], the oil goes there first: waiting is not stopping short. */
 const MOVES = 5e-3;
 /** Force counts as reached from this share on. */
 const ENOUGH = 0.995;
@@ -62,7 +60,7 @@ function stopsShort(context: FindingContext, cylinder: Component): Finding[] {
       const x = position[i]!;
       const way = command(i);
       if (way === 0 || !turning(i) || Math.abs(velocity[i]!) >= AT_REST) return -1;
-      if ((way > 0 ? cap[i]! : rod[i]!) < FILLED && othersMove(i)) return -1;
+      if (othersMove(i)) return -1;
       if ((way > 0 ? cap[i]! : rod[i]!) < 0) return -1;
       if ((way > 0 && x > stroke - END) || (way < 0 && x < END)) return -1;
       if (way > 0 && needed !== null && load && load[i]! >= ENOUGH * needed) return -1;
