@@ -145,6 +145,7 @@ export function openPorts(document: CircuitDocument, nets: Nets): Problem[] {
 function openPort(document: CircuitDocument, component: Component, entry: NetPort): Problem[] {
   const ref: PortRef = { component: component.id, port: entry.port.id };
   const words = portInWords(document, ref);
+  if (component.kind === 'relief-valve' && entry.port.role === 'outlet') return [noWayToTank(component, entry.port.id)];
   if (entry.port.whenOpen === 'plugged') return [];
   if (entry.port.whenOpen === 'tank') {
     return [
@@ -157,21 +158,27 @@ function openPort(document: CircuitDocument, component: Component, entry: NetPor
       },
     ];
   }
-  const problem = (code: string, message: string, label: string, action: 'add-tank' | 'add-drive' | 'join'): Problem[] => [
+  const problem = (code: string, message: string, label: string, action: 'add-drive' | 'join'): Problem[] => [
     { severity: 'problem', code, message, ...ref, cure: { label, action, ...ref } },
   ];
   if (entry.port.medium === 'shaft')
     return problem('no-drive', `${Called(component)} has no drive: nothing turns its shaft.`, 'Add a motor', 'add-drive');
-  if (entry.port.source !== true && component.kind === 'compensated-pump' && entry.port.role === 'inlet') {
-    return problem('no-suction', `${Called(component)} has nothing to draw from: its suction is open.`, 'Add a tank', 'add-tank');
-  }
-  if (component.kind === 'relief-valve' && entry.port.role === 'outlet') {
-    return problem('relief-no-tank', `${Called(component)} has no way to tank.`, 'Add a tank', 'add-tank');
-  }
   return problem('open-port', `${words} is open: nothing is joined to it.`, 'Join it', 'join');
 }
 
-/** Reliefs and pump suctions whose joined port leads to no tank. */
+/** A relief that passes nowhere protects nothing: never taken for granted, whatever its kind says about open ports. */
+function noWayToTank(component: Component, port: string): Problem {
+  return {
+    severity: 'problem',
+    code: 'relief-no-tank',
+    message: `${Called(component)} has no way to tank.`,
+    component: component.id,
+    port,
+    cure: { label: 'Join it to a tank here', action: 'add-tank', component: component.id, port },
+  };
+}
+
+/** Reliefs whose joined outlet leads to no tank. */
 export function tankProblems(document: CircuitDocument, nets: Nets): Problem[] {
   const ways = waysBetweenNets(document, nets);
   const problems: Problem[] = [];
@@ -184,14 +191,7 @@ export function tankProblems(document: CircuitDocument, nets: Nets): Problem[] {
     if (!outlet) continue;
     const address = `${component.id}.${outlet.id}`;
     if (isOpen(nets, address) || leadsToTank(address)) continue;
-    problems.push({
-      severity: 'problem',
-      code: 'relief-no-tank',
-      message: `${Called(component)} has no way to tank.`,
-      component: component.id,
-      port: outlet.id,
-      cure: { label: 'Add a tank', action: 'add-tank', component: component.id, port: outlet.id },
-    });
+    problems.push(noWayToTank(component, outlet.id));
   }
   return problems;
 }

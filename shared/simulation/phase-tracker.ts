@@ -54,9 +54,10 @@ export class PhaseTracker {
       totals.to = time;
       const end = this.phases[this.totals.length - 1]?.to ?? Number.POSITIVE_INFINITY;
       const more = r + 1 < rows ? times[r + 1]! : Number.POSITIVE_INFINITY;
-      if (time >= end && more > time && this.totals.length < this.phases.length) {
+      if (time >= end && this.totals.length < this.phases.length) {
         totals = this.open(time);
-        this.take(totals, data, at, columns, 0);
+        // Where an input jumps, the row before the jump ends the old phase and the row after it starts the new one.
+        if (more > time) this.take(totals, data, at, columns, 0);
       }
     }
     this.next = rows;
