@@ -16,7 +16,7 @@ const variants: Record<string, readonly Record<string, number | string>[]> = {
   ],
   cylinder: [
     {},
-    { workForce: 52e3, workContact: 0.1, workFull: 0.35, workShape: '1', angle: 0.7 },
+    { workForce: 52e3, workContact: 0.1, workFull: 0.35, workShape: '1', workSpringback: 0.02, angle: 0.7 },
     { workForce: 52e3, workContact: 0.1, workFull: 0.35, workShape: '3', springRate: 1e5, springFrom: 0.2, crossLeakage: 1e-13 },
   ],
 };

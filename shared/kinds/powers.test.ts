@@ -28,7 +28,9 @@ describe('energy laws', () => {
       for (let trial = 0; trial < 300; trial += 1) {
         const rig = rigOf(
           kind,
-          kind.id === 'cylinder' ? { workForce: 52e3, workContact: 0.1, workFull: 0.35, angle: 0.5, crossLeakage: 1e-12 } : {},
+          kind.id === 'cylinder'
+            ? { workForce: 52e3, workContact: 0.1, workFull: 0.35, angle: 0.5, workSpringback: 0.3, crossLeakage: 1e-12 }
+            : {},
         );
         scatter(rig, random, trial % 2 === 1);
         rig.flow();

@@ -3,6 +3,7 @@ import { part, pipe } from '#shared/circuit/samples/sample-builder.ts';
 import { liftStarter } from '#shared/circuit/samples/starter-lift.ts';
 import { standStarter } from '#shared/circuit/samples/starter-stand.ts';
 import type { CircuitDocument, Command } from '#shared/circuit/schema.ts';
+import { classTimeConstant, tripTime } from '#shared/kinds/electric-motor/laws.ts';
 import { compileCircuit } from '#shared/simulation/compile.ts';
 import { channelOf, type RunResult, valueAt } from '#shared/simulation/result.ts';
 import { runToEnd } from '#shared/simulation/run.ts';
@@ -264,5 +265,14 @@ describe('the motor', () => {
     const result = run(changed(standStarter, { ...outOfTheWay, 'M1.fault.single-phasing': 1 }, closing));
     expect(Math.abs(at(result, 'M1.speed', 2))).toBeLessThan(1);
     expect(at(result, 'M1.current', 2)).toBeGreaterThan(4 * 21);
+  });
+
+  it('held at standstill draws its locked-rotor current until the overload relay opens the contactor', () => {
+    const result = run(changed(standStarter, { ...outOfTheWay, 'P1.fault.seized': 1, 'M1.relayDial': 10 }, closing));
+    const trip = result.events.find((event) => event.component === 'M1' && event.signal === 'overload-trip')!;
+    expect(at(result, 'M1.current', 1)).toBeGreaterThan(5.9 * 21);
+    const predicted = tripTime(at(result, 'M1.current', 1) / 10, 1.15, classTimeConstant('IEC', '10'));
+    expect(Math.abs(trip.time / predicted - 1)).toBeLessThan(0.01);
+    expect(at(result, 'M1.current', trip.time + 0.5)).toBe(0);
   });
 });
