@@ -1,9 +1,25 @@
 import { lazy, Suspense, useEffect } from 'react';
 import { Outlet } from 'react-router-dom';
 import { startRunController } from '#src/features/run/run-controller.ts';
+import { loadLater } from '#src/lib/idle.ts';
 import { useExplain } from '#src/stores/explain-store.ts';
 import { DialogHost } from './dialogs/dialog-host.tsx';
 import { keepDraft } from './keep-draft.ts';
+
+/** Everything that is not on the first view. */
+const later = [
+  () => import('#src/components/menu.tsx'),
+  () => import('#src/features/nameplate/nameplate-layer.tsx'),
+  () => import('#src/features/nameplate/explain-panel.tsx'),
+  () => import('#src/features/settings/units-dialog.tsx'),
+  () => import('#src/features/settings/keys-dialog.tsx'),
+  () => import('#src/features/settings/about-dialog.tsx'),
+  () => import('#src/features/cases/difference-dialog.tsx'),
+  () => import('#src/features/cases/delete-case-dialog.tsx'),
+  () => import('./dialogs/refused-file-dialog.tsx'),
+  () => import('./routes/draw.tsx'),
+  () => import('./routes/start.tsx'),
+];
 
 const ExplainPanel = lazy(async () => ({ default: (await import('#src/features/nameplate/explain-panel.tsx')).ExplainPanel }));
 
@@ -12,6 +28,7 @@ export function Shell() {
   const explaining = useExplain((state) => state.address !== null);
   useEffect(() => keepDraft(), []);
   useEffect(() => startRunController(), []);
+  useEffect(() => loadLater(later), []);
   return (
     <>
       <Outlet />

@@ -91,6 +91,8 @@ export interface VerdictChipProps {
   /** What to say while there is no verdict, or beside a stale one. */
   readonly state?: 'waiting' | 'running' | 'stale' | 'refused' | 'broken' | 'done';
   readonly size?: 'dense' | 'touch';
+  /** The word without its figure. */
+  readonly short?: boolean;
   /** Only the shape, the words are for a reader: the narrow cards of the phone. */
   readonly bare?: boolean;
 }
@@ -105,12 +107,13 @@ const stateWords = {
 } as const;
 
 /** Shape, word, comma, figure or time. */
-export function VerdictChip({ verdict, state = 'done', size = 'dense', bare = false }: VerdictChipProps) {
+export function VerdictChip({ verdict, state = 'done', size = 'dense', short = false, bare = false }: VerdictChipProps) {
   const format = useFormat();
   const refused = state === 'refused' || state === 'broken';
   const id: VerdictShape = verdict && !refused ? verdict.id : refused ? 'failed' : 'waiting';
   const figure = verdict?.figure && !refused ? format.figure(verdict.figure) : null;
-  const text = verdict && !refused ? `${verdict.word}${figure ? `, ${joined(figure.value, figure.unit)}` : ''}` : stateWords[state];
+  const text =
+    verdict && !refused ? `${verdict.word}${figure && !short ? `, ${joined(figure.value, figure.unit)}` : ''}` : stateWords[state];
   return (
     <span
       className={`chip chip-${size}${bare ? ' chip-bare' : ''}`}

@@ -1,4 +1,4 @@
-import { type ReactNode, useMemo, useState } from 'react';
+import { lazy, type ReactNode, Suspense, useMemo, useState } from 'react';
 import { CautionLine } from '#src/components/caution-line.tsx';
 import { ErrorRegion } from '#src/components/error-region.tsx';
 import { useFormat } from '#src/components/use-format.ts';
@@ -7,39 +7,52 @@ import { CaseRow } from '#src/features/cases/case-row.tsx';
 import { FindingsPanel } from '#src/features/findings/findings-panel.tsx';
 import { showMoment } from '#src/features/findings/show-moment.ts';
 import { LoadPicturePanel } from '#src/features/load-picture/load-picture-panel.tsx';
-import { NameplateLayer } from '#src/features/nameplate/nameplate-layer.tsx';
 import { TapePanel } from '#src/features/tape/tape-panel.tsx';
 import { useLayout } from '#src/lib/layout.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { type NumberedFinding, useNumberedFindings } from '#src/stores/findings-numbering.ts';
+import { useNameplate } from '#src/stores/nameplate-store.ts';
+import { useBenchKeys } from '../bench-keys.ts';
 import { BottomBar, type PhoneView } from '../bottom-bar.tsx';
 import { NoticeStrip } from '../notice-strip.tsx';
+import { PrintHost } from '../print/print-host.tsx';
 import { TopLine } from '../top-line.tsx';
+
+const NameplateLayer = lazy(async () => ({ default: (await import('#src/features/nameplate/nameplate-layer.tsx')).NameplateLayer }));
 
 /** The bench: one sheet of paper, its regions divided by ink rules, in the arrangement the width allows. */
 export function BenchRoute() {
   const layout = useLayout();
   const phone = layout === 'phone';
+  useBenchKeys();
   return (
-    <div className={`screen screen-${layout}`}>
-      <TopLine screen="bench" />
-      <div className="under-top">
-        <CaseRow form={phone ? 'phone' : 'cards'} />
-        <NoticeStrip />
+    <>
+      <div className={`screen screen-${layout}`}>
+        <TopLine screen="bench" />
+        <div className="under-top">
+          <CaseRow form={phone ? 'phone' : 'cards'} />
+          <NoticeStrip />
+        </div>
+        {layout === 'desk' && <WideBench form="list" layout="desk" />}
+        {layout === 'rail' && <WideBench form="rail" layout="rail" />}
+        {layout === 'narrow' && <NarrowBench />}
+        {phone && <PhoneBench />}
       </div>
-      {layout === 'desk' && <WideBench form="list" layout="desk" />}
-      {layout === 'rail' && <WideBench form="rail" layout="rail" />}
-      {layout === 'narrow' && <NarrowBench />}
-      {phone && <PhoneBench />}
-    </div>
+      <PrintHost />
+    </>
   );
 }
 
 function Drawing() {
+  const plate = useNameplate((state) => state.target !== null);
   return (
     <>
       <BenchDrawing />
-      <NameplateLayer />
+      {plate && (
+        <Suspense fallback={null}>
+          <NameplateLayer />
+        </Suspense>
+      )}
     </>
   );
 }
@@ -124,7 +137,7 @@ function NarrowBench() {
         </div>
         {side === 'findings' ? (
           <Region name="findings" title="Findings">
-            <FindingsPanel form="rail" />
+            <FindingsPanel form="list" />
           </Region>
         ) : (
           <Region name="load" title="The load picture">

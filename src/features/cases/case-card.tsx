@@ -25,7 +25,9 @@ export function CaseCard({ entry, place, form, shown }: CaseCardProps) {
   const letter = caseLetter(entry);
   const active = place === 'drawing';
   const state = run?.state === 'done' ? (run.stale ? 'stale' : 'done') : (run?.state ?? 'waiting');
-  const chip = <VerdictChip verdict={run?.assessment?.verdict ?? null} state={state} bare={form === 'phone' && !active} />;
+  const chip = (
+    <VerdictChip verdict={run?.assessment?.verdict ?? null} state={state} short={form === 'phone'} bare={form === 'phone' && !active} />
+  );
 
   function finish(name: string) {
     setRenaming(false);

@@ -7,8 +7,14 @@ import type { NumberedFinding } from '#src/stores/findings-numbering.ts';
 import { RemedyAction, RemedyWords } from './remedy.tsx';
 import { showMoment } from './show-moment.ts';
 
+export interface FindingItemProps {
+  readonly entry: NumberedFinding;
+  /** Caution that goes with it, unless an earlier finding has said it. */
+  readonly caution?: string;
+}
+
 /** Numeral, pen, headline with its time; cause with the figures that collide; remedy; one primary and one quiet action. */
-export function FindingItem({ entry }: { readonly entry: NumberedFinding }) {
+export function FindingItem({ entry, caution }: FindingItemProps) {
   const { finding, number, ink } = entry;
   return (
     <article className="finding" data-rule={finding.rule} data-severity={finding.severity} id={`finding-${number}`}>
@@ -23,10 +29,10 @@ export function FindingItem({ entry }: { readonly entry: NumberedFinding }) {
         <PhraseText phrase={finding.cause} caseId={finding.caseId} />
         <RemedyWords finding={finding} />
       </p>
-      {finding.caution && (
+      {caution && (
         <p className="finding-caution">
           <CautionIcon size={16} />
-          <span>{finding.caution}</span>
+          <span>{caution}</span>
         </p>
       )}
       <div className="finding-actions">

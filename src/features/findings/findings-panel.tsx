@@ -1,5 +1,5 @@
 import { useState } from 'react';
-import { useNumberedFindings } from '#src/stores/findings-numbering.ts';
+import { type NumberedFinding, useNumberedFindings } from '#src/stores/findings-numbering.ts';
 import { FindingItem } from './finding-item.tsx';
 import { FindingsState } from './findings-state.tsx';
 import { MotorLoad } from './motor-load.tsx';
@@ -22,9 +22,13 @@ export function FindingsPanel({ form }: FindingsPanelProps) {
     <div className={`findings findings-${form}`}>
       <FindingsState />
       <ol className="finding-list">
-        {shown.map((entry) => (
+        {shown.map((entry, index) => (
           <li key={`${entry.finding.caseId}:${entry.finding.id}`} value={entry.number}>
-            {form === 'rail' ? <RailItem entry={entry} /> : <FindingItem entry={entry} />}
+            {form === 'rail' ? (
+              <RailItem entry={entry} caution={firstWith(shown, index)} />
+            ) : (
+              <FindingItem entry={entry} caution={firstWith(shown, index)} />
+            )}
           </li>
         ))}
       </ol>
@@ -33,7 +37,13 @@ export function FindingsPanel({ form }: FindingsPanelProps) {
           {open ? 'Only the worst three' : `${rest} more`}
         </button>
       )}
-      {form === 'list' && <MotorLoad />}
+      <MotorLoad />
     </div>
   );
+}
+
+/** A caution stands with the first finding that brings it, not with each. */
+function firstWith(shown: readonly NumberedFinding[], index: number): string | undefined {
+  const caution = shown[index]?.finding.caution;
+  return shown.findIndex((entry) => entry.finding.caution === caution) === index ? caution : undefined;
 }

@@ -5,11 +5,12 @@ import { PhraseText } from '#src/components/quantity.tsx';
 import { useCursor } from '#src/stores/cursor-store.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import type { NumberedFinding } from '#src/stores/findings-numbering.ts';
+import type { FindingItemProps } from './finding-item.tsx';
 import { RemedyAction, RemedyWords } from './remedy.tsx';
 import { showMoment } from './show-moment.ts';
 
 /** The rail's card: numeral, pen, headline; pressing it shows the moment and opens the cause. */
-export function RailItem({ entry }: { readonly entry: NumberedFinding }) {
+export function RailItem({ entry, caution }: FindingItemProps) {
   const { finding, number, ink } = entry;
   const [open, setOpen] = useState(false);
   const time = useCursor((state) => state.time);
@@ -38,7 +39,7 @@ export function RailItem({ entry }: { readonly entry: NumberedFinding }) {
             <PhraseText phrase={finding.cause} caseId={finding.caseId} />
             <RemedyWords finding={finding} />
           </p>
-          {finding.caution && <p className="finding-cause">{finding.caution}</p>}
+          {caution && <p className="finding-cause">{caution}</p>}
           <RemedyAction finding={finding} />
         </>
       )}

@@ -1,0 +1,23 @@
+import { useEffect, useState } from 'react';
+import { flushSync } from 'react-dom';
+import { PrintSheet } from './print-sheet.tsx';
+
+/** Puts the printed sheet on the page only while it is printed, whoever asked for it (menu, keys, the browser's own command). */
+export function PrintHost() {
+  const [printing, setPrinting] = useState(false);
+  useEffect(() => {
+    const paper = window.matchMedia('print');
+    const begin = () => flushSync(() => setPrinting(true));
+    const end = () => setPrinting(false);
+    const follow = () => (paper.matches ? setPrinting(true) : setPrinting(false));
+    window.addEventListener('beforeprint', begin);
+    window.addEventListener('afterprint', end);
+    paper.addEventListener('change', follow);
+    return () => {
+      window.removeEventListener('beforeprint', begin);
+      window.removeEventListener('afterprint', end);
+      paper.removeEventListener('change', follow);
+    };
+  }, []);
+  return printing ? <PrintSheet /> : null;
+}
