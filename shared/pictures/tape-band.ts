@@ -32,6 +32,13 @@ export interface TapeBand {
   readonly marks: readonly PlacedMark[];
 }
 
+/** So many plain pins may lie over others before a third row is worth its height. */
+const CROWD = 2;
+
+function isGrave(mark: PlacedMark): boolean {
+  return mark.numerals.length > 0 || (mark.group?.pins.some((pin) => pin.verdict !== null) ?? false);
+}
+
 /** Swallow tail and padding of a flag beside its words [px]. */
 const FLAG_EXTRA = 22;
 const TICK = 8;
@@ -85,7 +92,8 @@ export function tapeBand(
   };
   let count = 2;
   let found = attempt(count);
-  if (view.mostRows > 2 && found.some((mark) => !mark.free)) {
+  const left = found.filter((mark) => !mark.free);
+  if (view.mostRows > 2 && (left.length > CROWD || left.some(isGrave))) {
     count = 3;
     found = attempt(count);
   }

@@ -183,7 +183,7 @@ describe('top edge', () => {
     expect(tapeBand(flags, [], [], view).flags[0]).toMatchObject({ x: 680, row: 0, mirrored: true });
   });
   it('has a third row only where it is allowed', () => {
-    const pins = [0.5, 0.52, 0.54].map((time, i) => pin({ time, caseId: 'ABC'[i] as string }));
+    const pins = [0.5, 0.52, 0.54].map((time, i) => pin({ time, caseId: 'ABC'[i] as string, verdict: 'relief-passing' }));
     const flags = [{ id: 'a', time: 0.3, words: 'Solenoid a on', short: 'a on' }];
     expect(tapeBand(flags, pins, [], view).rows).toBe(3);
     expect(tapeBand(flags, pins, [], { ...view, mostRows: 2 }).rows).toBe(2);

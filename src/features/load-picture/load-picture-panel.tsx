@@ -9,6 +9,7 @@ import { ShapeView, setMarkup } from '#src/components/schematic/shape-view.tsx';
 import { useFormat } from '#src/components/use-format.ts';
 import { useSize } from '#src/lib/use-size.ts';
 import { useCursor } from '#src/stores/cursor-store.ts';
+import { useRuns } from '#src/stores/run-store.ts';
 import { LoadSave } from './load-save.tsx';
 import { useLoadCases } from './use-load-cases.ts';
 import './load-picture.css';
@@ -58,6 +59,7 @@ export function LoadPicturePanel({ findings = [] }: LoadPicturePanelProps) {
     draw();
     return useCursor.subscribe((state, before) => state.time !== before.time && draw());
   }, [chart, cases]);
+  const settled = useRuns((state) => Object.values(state.byCase).some((entry) => entry.state === 'done' || entry.state === 'refused'));
   const words = useWords(cases, preferences);
   const ready = size.width > 0 && size.height > 0;
   const hasMotor = cases.some((entry) => entry.curves.motor !== null);
@@ -78,7 +80,7 @@ export function LoadPicturePanel({ findings = [] }: LoadPicturePanelProps) {
             <ShapeView shapes={chart.above} />
           </svg>
         )}
-        {cases.length === 0 && <p className="load-empty">The load picture needs a run with a pump.</p>}
+        {cases.length === 0 && settled && <p className="load-empty">The load picture needs a run with a pump.</p>}
       </div>
       <p className="visually-hidden">{words}</p>
     </section>

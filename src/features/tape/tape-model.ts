@@ -20,6 +20,8 @@ export interface TapeCase {
   readonly active: boolean;
   readonly stale: boolean;
   readonly running: boolean;
+  /** The drawing cannot be run, or the run broke. */
+  readonly refused: boolean;
   /** Time reached while running [s]. */
   readonly reached: number;
   readonly run: RunResult | null;
@@ -79,6 +81,7 @@ export function tapeCases(
       active,
       stale: state?.stale ?? false,
       running: state?.state === 'running',
+      refused: state?.state === 'refused' || state?.state === 'broken',
       reached: state?.reached ?? 0,
       run,
       pen: tracePen(entry.ink, active, shown.length),

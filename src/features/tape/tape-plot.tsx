@@ -29,7 +29,7 @@ export function TapePlot({ ref, model, plan, verticals, hidden, overlayReadings 
     const box = event.currentTarget.getBoundingClientRect();
     useCursor.getState().setTime(Math.min(geometry.to, Math.max(0, timeScale(geometry).invert(event.clientX - box.left))));
   };
-  const empty = model.cases.every((entry) => !entry.run);
+  const empty = model.cases.every((entry) => !entry.run) && model.cases.some((entry) => entry.refused);
   const below = plan.folded.length * FOLDED_ROW;
   return (
     <div className="tape-lanes" data-hidden={hidden || undefined}>
