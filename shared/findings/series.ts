@@ -5,12 +5,25 @@ export interface Window {
   readonly to: number;
 }
 
+/** Index of the first row later than a time; the number of rows when there is none. */
+function firstAfter(times: Float64Array, time: number): number {
+  let low = 0;
+  let high = times.length;
+  while (low < high) {
+    const middle = (low + high) >> 1;
+    if (times[middle]! > time) high = middle;
+    else low = middle + 1;
+  }
+  return low;
+}
+
 /** Integral of a column over a window by the trapezoid rule, its ends interpolated. */
 export function integrate(times: Float64Array, values: Float64Array, window: Window): number {
   let sum = 0;
-  for (let i = 1; i < times.length; i++) {
+  for (let i = Math.max(1, firstAfter(times, window.from)); i < times.length; i++) {
     const t0 = times[i - 1]!;
     const t1 = times[i]!;
+    if (t0 >= window.to) break;
     const from = Math.max(t0, window.from);
     const to = Math.min(t1, window.to);
     if (to <= from) continue;
@@ -55,15 +68,16 @@ export function lowest(times: Float64Array, values: Float64Array, window: Window
 export function stretches(times: Float64Array, margin: (index: number) => number, least: number): Window[] {
   const found: Window[] = [];
   let from: number | null = null;
+  let before = times.length > 0 ? margin(0) : 0;
   for (let i = 0; i < times.length; i++) {
-    const here = margin(i);
-    const before = i > 0 ? margin(i - 1) : here;
+    const here = i > 0 ? margin(i) : before;
     if (here > 0 && from === null) from = i > 0 ? cross(times[i - 1]!, before, times[i]!, here) : times[0]!;
     if (here <= 0 && from !== null) {
       const to = cross(times[i - 1]!, before, times[i]!, here);
       if (to - from >= least) found.push({ from, to });
       from = null;
     }
+    before = here;
   }
   const end = times[times.length - 1] ?? 0;
   if (from !== null && end - from >= least) found.push({ from, to: end });

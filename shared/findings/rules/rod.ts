@@ -47,8 +47,11 @@ function stopsShort(context: FindingContext, cylinder: Component): Finding[] {
   if (!position || !velocity || !cap || !rod || !command) return [];
   const stroke = plate.number('stroke');
   const needed = neededForce(context, id);
-  const turning = (i: number) =>
-    context.drives.length === 0 || context.drives.some((drive) => isTurning(context, drive.component.id, i, drive.facts.pullOutSpeed));
+  const speeds = context.drives.map((drive) => ({
+    values: context.column(`${drive.component.id}.speed`),
+    least: drive.facts.pullOutSpeed,
+  }));
+  const turning = (i: number) => speeds.length === 0 || speeds.some(({ values, least }) => values !== null && values[i]! >= least);
   const others = context
     .ofKind('cylinder')
     .filter((entry) => entry.id !== id)
@@ -71,11 +74,6 @@ function stopsShort(context: FindingContext, cylinder: Component): Finding[] {
   const window = stuck[0];
   if (!window) return [];
   return [finding(context, id, window, needed)];
-}
-
-function isTurning(context: FindingContext, motor: string, i: number, pullOutSpeed: number): boolean {
-  const speed = context.column(`${motor}.speed`);
-  return speed !== null && speed[i]! >= pullOutSpeed;
 }
 
 function finding(context: FindingContext, id: string, window: Window, needed: number | null): Finding {

@@ -23,19 +23,17 @@ function slower(context: FindingContext, pump: string): Finding[] {
   const speed = context.column(`${motor.component.id}.speed`);
   const cylinders = context.ofKind('cylinder').filter((cylinder) => feedingPumps(context, cylinder.id).includes(pump));
   if (!speed || cylinders.length === 0) return [];
-  const columns = cylinders.map(({ id }) => ({
-    id,
-    velocity: context.column(`${id}.velocity`),
-    a: context.column(`${id}.A.flow`),
-    b: context.column(`${id}.B.flow`),
-  }));
-  const taken = Float64Array.from(context.times, (_, i) =>
-    columns.reduce(
-      (sum, { velocity, a, b }) =>
-        sum + (velocity && a && b && Math.abs(velocity[i]!) > MOVING ? Math.max(0, velocity[i]! > 0 ? a[i]! : b[i]!) : 0),
-      0,
-    ),
-  );
+  const taken = new Float64Array(context.times.length);
+  for (const { id } of cylinders) {
+    const velocity = context.column(`${id}.velocity`);
+    const cap = context.column(`${id}.A.flow`);
+    const rod = context.column(`${id}.B.flow`);
+    if (!velocity || !cap || !rod) continue;
+    for (let i = 0; i < taken.length; i++) {
+      const v = velocity[i]!;
+      if (Math.abs(v) > MOVING) taken[i] = taken[i]! + Math.max(0, v > 0 ? cap[i]! : rod[i]!);
+    }
+  }
   const moving = taken.map((value) => (value > 0 ? 1 : 0));
   const stop = context.plate(pump).number('maxVolumeStop');
   const ideal = speed.map((value, i) => (moving[i]! > 0 ? stop * Math.max(0, value) : 0));
@@ -58,7 +56,7 @@ function slower(context: FindingContext, pump: string): Finding[] {
     {
       id: `slower-than-pump:${pump}`,
       rule: 'slower-than-pump',
-      severity: 2,
+      severity: throttled(context, pump, worst.window) ? 3 : 2,
       caseId: context.caseId,
       component: cylinders[0]!.id,
       time: worst.phase.from,
@@ -74,6 +72,12 @@ function slower(context: FindingContext, pump: string): Finding[] {
       remedy: { words: say('Look first where the larger share goes; time the stroke without load and read the case-drain flow.') },
     },
   ];
+}
+
+/** The compensator alone accounts for it: something downstream throttles the flow, as it may be meant to. */
+function throttled(context: FindingContext, pump: string, window: Window): boolean {
+  const stroke = context.column(`${pump}.displacement`);
+  return stroke !== null && 1 - mean(context.times, stroke, window) / context.plate(pump).number('maxVolumeStop') > 1 - SHARE;
 }
 
 function losses(context: FindingContext, pump: string, window: Window, moving: Float64Array): Phrase {
