@@ -7,5 +7,7 @@ export interface SimulateJob {
   readonly caseId: string;
   readonly rtol: number;
   readonly channels: boolean | readonly string[];
+  /** Longest computing time [ms]; the run is given up when it is over. */
+  readonly within: number;
 }
-export type SimulateJobResult = SimulateResponse;
+export type SimulateJobResult = SimulateResponse | { readonly outcome: 'given-up'; readonly time: number };
