@@ -10,11 +10,10 @@ export interface TagToolsProps {
   readonly state: TagState;
   readonly pinned: boolean;
   readonly onRefused: (refusal: TurnRefusal | null) => void;
-  readonly onOpen: () => void;
 }
 
 /** Buttons of the tag in hand: a quarter turn either way, the lock nut, back to as found, pin. */
-export function TagTools({ spec, state, pinned, onRefused, onOpen }: TagToolsProps) {
+export function TagTools({ spec, state, pinned, onRefused }: TagToolsProps) {
   const { document } = useDocument.getState();
   const dragged = spec.address in document.tagPlaces;
   function pin() {
@@ -49,9 +48,6 @@ export function TagTools({ spec, state, pinned, onRefused, onOpen }: TagToolsPro
       </button>
       <button type="button" aria-pressed={pinned} onClick={pin}>
         {pinned || dragged ? 'Unpin' : 'Pin'}
-      </button>
-      <button type="button" aria-label="Nameplate" onClick={onOpen}>
-        Plate
       </button>
     </div>
   );

@@ -15,7 +15,7 @@ export function tagValue(spec: TagSpec, state: TagState, format: Format): Format
   return format.quantity(state.value, spec.quantity);
 }
 
-/** "3 turns in", "lock-nut tight", "changed in C", "nameplate 400": what is most worth knowing. */
+/** "3 turns in", "lock-nut tight", "C differs", "nameplate 400": what is most worth knowing. */
 export function tagNote(spec: TagSpec, state: TagState, activeInk: number, pinned: boolean, plate: number | null, format: Format): string {
   if (!spec.screw) {
     if (plate !== null) return `nameplate ${format.quantity(plate, spec.quantity).value}`;
@@ -24,7 +24,7 @@ export function tagNote(spec: TagSpec, state: TagState, activeInk: number, pinne
   }
   if (Math.abs(state.turns) >= 0.125) return formatTurns(state.turns);
   const elsewhere = state.changedIn.filter((ink) => ink !== activeInk);
-  if (elsewhere.length > 0) return `changed in ${elsewhere.map(caseLetter).join(', ')}`;
+  if (elsewhere.length > 0) return `${elsewhere.map(caseLetter).join(', ')} ${elsewhere.length === 1 ? 'differs' : 'differ'}`;
   if (state.locked) return 'lock-nut tight';
   if (Math.abs(state.turns) > 1e-6) return 'a touch off';
   return pinned ? 'pinned' : 'as found';

@@ -35,13 +35,17 @@ export const Tag = memo(function Tag({ spec, state, form, eyelet, ink, inHand, t
   const [refusal, setRefusal] = useState<TurnRefusal | null>(null);
   const [typing, setTyping] = useState<string | null>(null);
   const open = useCallback(() => onOpen(spec.component), [onOpen, spec.component]);
+  const type = (first: string) => {
+    setRefusal(null);
+    setTyping(first);
+  };
   const startTurn = useTurnDrag({ spec, onRefused: setRefusal, mode: 'around' });
   const startSlide = useTurnDrag({
     spec,
     onRefused: setRefusal,
     mode: { pixelsPerTurn: (perTurn) => ((RULER - 4) * perTurn) / Math.max(1e-30, state.max - state.min) },
   });
-  const onKeyDown = useTurnKeys({ spec, onRefused: setRefusal, onOpen: open, onType: setTyping });
+  const onKeyDown = useTurnKeys({ spec, onRefused: setRefusal, onOpen: open, onType: type });
   const wheel = useTurnWheel<HTMLFieldSetElement>(spec, setRefusal);
   const document = useDocument((store) => store.document);
   const value = tagValue(spec, state, format);
@@ -100,7 +104,9 @@ export const Tag = memo(function Tag({ spec, state, form, eyelet, ink, inHand, t
       {form === 'full' && (
         <div className="tag-body">
           <div className="tag-head">
-            <span className="tag-name">{title}</span>
+            <button type="button" className="tag-name nodrag" tabIndex={inHand ? 0 : -1} title="Nameplate" onClick={open}>
+              {title}
+            </button>
             <span className="tag-note">{tagNote(spec, state, ink, pinned, plateVoltage(document, spec), format)}</span>
           </div>
           {typing === null ? (
@@ -111,7 +117,7 @@ export const Tag = memo(function Tag({ spec, state, form, eyelet, ink, inHand, t
               aria-label={`${value.text}. Type a value`}
               onClick={() => {
                 take();
-                setTyping('');
+                type('');
               }}
             >
               {shown}
@@ -126,7 +132,7 @@ export const Tag = memo(function Tag({ spec, state, form, eyelet, ink, inHand, t
         </div>
       )}
       {form === 'full' && <span className="tag-eyelet" aria-hidden="true" />}
-      {inHand && form === 'full' && !touch && <TagTools spec={spec} state={state} pinned={pinned} onRefused={setRefusal} onOpen={open} />}
+      {inHand && form === 'full' && !touch && <TagTools spec={spec} state={state} pinned={pinned} onRefused={setRefusal} />}
       {refusal && <TagRefusal spec={spec} refusal={refusal} onDone={() => setRefusal(null)} />}
     </fieldset>
   );
