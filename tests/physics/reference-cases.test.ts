@@ -107,7 +107,7 @@ for (const name of ['S1', 'S2'] as const) {
     });
 
     it('meets the event times', () => {
-      for (const [key, expected] of Object.entries(events[name])) {
+      for (const [key, expected] of Object.entries(events[name] as Readonly<Record<string, readonly number[]>>)) {
         for (const [result, early, late] of [
           [normal, 0.002, 0.008],
           // The page rounds to 0.1 ms: half of that is added to the limit of 0.1 ms.
