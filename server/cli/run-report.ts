@@ -68,7 +68,7 @@ function yardstickLines(load: RunSummary['yardsticks'][number], nameOf: (id: str
   const stall = load.stalled && load.stallTime !== undefined ? `, stalls at ${seconds(load.stallTime)}` : '';
   const trip = load.tripTime === null ? 'does not trip' : `trips after ${quantity(load.tripTime, 'time')} of this duty, repeated`;
   const torque = `torque peak ${quantity(load.peakTorque, 'ratio')}, RMS ${quantity(load.rmsTorque, 'ratio')} rated`;
-  const current = `current peak ${quantity(load.peakCurrent, 'ratio')}, RMS ${quantity(load.rmsCurrent, 'ratio')} nameplate`;
+  const current = `current peak ${quantity(load.peakCurrent, 'current')}, RMS ${quantity(load.rmsCurrent, 'ratio')} nameplate`;
   return [`${nameOf(load.motor)}  stall margin ${margin}${stall}; ${torque}; ${current}; overload ${trip}`];
 }
 

@@ -82,11 +82,11 @@ export function quantityFigure(base: Base, requirement: Requirement, value: numb
   return figure(value, quantity, { address: requirement.quantity, ...(quantity === 'force' ? { digits: 0 } : {}) });
 }
 
-/** The answer: 'met, 2.9 s' or 'missed: 36 kN'. */
-export function answerInWords(base: Base, result: RequirementResult): Phrase {
-  const { requirement, value, met } = result;
-  if (value === null) return say(requirement.measure === 'time to reach' ? 'never reached' : 'no value in this run');
-  return say(met ? 'met: ' : 'missed: ', limitFigure(base, requirement, value));
+/** What the run gave: '36 kN', '2.9 s', 'never reached'. */
+export function answerInWords(base: Base, { requirement, value }: RequirementResult): Phrase {
+  if (value !== null) return say(limitFigure(base, requirement, value));
+  if (requirement.quantity === 'stall margin') return say('none, the motor is past pull-out or not up to speed');
+  return say(requirement.measure === 'time to reach' ? 'never reached' : 'no value in this run');
 }
 
 export function requirementRows(base: Base, results: readonly RequirementResult[]): Assessment['requirements'] {

@@ -38,7 +38,10 @@ export function requirementRules(context: FindingContext, found: readonly Findin
       caseId: context.caseId,
       ...(componentOf(context, result) ? { component: componentOf(context, result)! } : {}),
       headline: say(askedInWords(context, result.requirement)),
-      cause: say(capital(answerInWords(context, result)), '.'),
+      cause:
+        result.value === null
+          ? say(capital(answerInWords(context, result)), '.')
+          : say('The run gives ', answerInWords(context, result), '.'),
     }));
 }
 

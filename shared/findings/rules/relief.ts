@@ -42,7 +42,10 @@ function passes(context: FindingContext, relief: Component, pump: Component | un
   const drop = context.at(`${relief.id}.P.pressure`, (longest.from + longest.to) / 2);
   const cracks = cracking(context, relief.id);
   const deadHead = pump ? context.plate(pump.id).number('compensatorPressure') : Number.POSITIVE_INFINITY;
-  const hidden = pump !== undefined && cracks <= deadHead;
+  const reseat = cracks * context.plate(relief.id).number('reseat');
+  // Oil that crosses well under the pressure at which the valve should be shut again: the valve, not a setting.
+  const stuck = drop < 0.95 * reseat;
+  const hidden = !stuck && pump !== undefined && cracks <= deadHead;
   return [
     {
       id: `relief-passing:${relief.id}`,
@@ -65,9 +68,11 @@ function passes(context: FindingContext, relief: Component, pump: Component | un
         ': ',
         heat(power),
         ' of heat. ',
-        hidden
-          ? say('It opens at ', pressure(cracks), '; the compensator would go to zero flow only at ', pressure(deadHead), '.')
-          : 'The pump does not go off stroke before the relief opens.',
+        stuck
+          ? say('It should crack at ', pressure(cracks), ' and be shut again at ', pressure(reseat), '.')
+          : hidden
+            ? say('It opens at ', pressure(cracks), '; the compensator would go to zero flow only at ', pressure(deadHead), '.')
+            : 'The pump does not go off stroke before the relief opens.',
       ),
       remedy:
         hidden && pump
@@ -76,11 +81,17 @@ function passes(context: FindingContext, relief: Component, pump: Component | un
               pump.id,
               say('Turn the compensator down until it works before the relief. A higher relief is not a cure.'),
             )
-          : {
-              words: say(
-                'Find why the pump does not go off stroke: compensator, its pilot line, a stuck swash plate, or a minimum stop wound in.',
-              ),
-            },
+          : stuck
+            ? {
+                words: say(
+                  'Have the relief taken out and looked at: dirt under the seat, a broken spring. Turning its screw does not cure it.',
+                ),
+              }
+            : {
+                words: say(
+                  'Find why the pump does not go off stroke: compensator, its pilot line, a stuck swash plate, or a minimum stop wound in.',
+                ),
+              },
       caution: HELD_RELIEF,
       at: { pressure: drop, flow: amount },
     },

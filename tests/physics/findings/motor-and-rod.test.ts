@@ -138,6 +138,12 @@ describe('relief', () => {
     expect(rulesOf(short)).not.toContain('relief-passing');
   });
 
+  it('that passes oil well under its reseat pressure is stuck open: the valve, not a setting', () => {
+    const finding = find(assess({ channels: { 'V2.flow': 20 * litresPerMinute, 'V2.P.pressure': 20 * bar } }), 'relief-passing');
+    expect(words(finding.cause)).toContain('It should crack at');
+    expect(finding.remedy?.seek).toBeUndefined();
+  });
+
   it('close above dead-head is told from the gap to cracking, not to the set pressure', () => {
     const gaps = (set: number) => assess({ document: changed({ 'V2.setPressure': set * bar }) });
     expect(values(find(gaps(208), 'relief-gap-small').headline)[0]).toBeCloseTo((208 * bar) / 1.054 - 190 * bar, 0);
