@@ -71,12 +71,12 @@ function shaftBoxes(points: readonly Point[]): readonly Box[] {
 /** Row of buttons under the tag in hand [px]. */
 export const TOOLS = 34;
 
-/** Pixels of the three forms; a finger needs 48. */
+/** Pixels of the three forms. A chip is small, but takes presses from around it. */
 export function tagSizes(touch: boolean, chipText: string): Record<TagForm, { readonly width: number; readonly height: number }> {
   return {
     full: { width: 226, height: touch ? 68 : 64 },
     compact: { width: 107, height: touch ? 48 : 44 },
-    chip: { width: Math.max(touch ? 48 : 30, 16 + chipText.length * 10), height: touch ? 34 : 24 },
+    chip: { width: Math.max(30, 13 + chipText.length * 8.6), height: 24 },
   };
 }
 
