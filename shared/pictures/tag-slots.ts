@@ -175,15 +175,18 @@ function beforeAnchor({ from, to }: StringLine): Point {
   return { x: from.x + (to.x - from.x) * 0.92, y: from.y + (to.y - from.y) * 0.92 };
 }
 
+/** The place it had before, while that is still free; null when it is taken or the form changed. */
+function sameAgain(request: TagRequest, sheet: Sheet, others: readonly TagPlace[]): TagPlace | null {
+  const { before, form } = request;
+  if (!before || before.dragged || before.form !== form || !before.free) return null;
+  const same = placeOf(request, form, { ...before.box, ...request.sizes[form] }, true, false);
+  return judge(request, same, sheet, others).free ? same : null;
+}
+
 function seat(request: TagRequest, sheet: Sheet, others: readonly TagPlace[]): TagPlace {
   const wanted = forms.slice(forms.indexOf(request.form));
   for (const form of wanted) {
     const size = request.sizes[form];
-    const before = request.before;
-    if (before && !before.dragged && before.form === form && before.free) {
-      const same = placeOf(request, form, { ...before.box, ...size }, true, false);
-      if (judge(request, same, sheet, others).free) return same;
-    }
     let second: TagPlace | null = null;
     for (const candidate of candidates(request, size, sheet)) {
       const place = placeOf(request, form, candidate.box, true, false);
@@ -223,21 +226,29 @@ function shared(a: Box, b: Box): number {
   return w > 0 && h > 0 ? w * h : 0;
 }
 
-/** Places of all tags by address. Dragged tags stay where they were put; the one in hand is seated next, then those that stood
- *  somewhere before, then the rest: large ones first, in the order given (flow order). */
+/** Places of all tags by address. Dragged tags stay where they were put; then the one in hand is seated; then those that stood
+ *  somewhere before stay there while it is free; then the rest: large ones first, in the order given (flow order). */
 export function placeTags(requests: readonly TagRequest[], sheet: Sheet): ReadonlyMap<string, TagPlace> {
-  const rank = (request: TagRequest) =>
-    (request.dragged ? 0 : request.inHand ? 1 : request.before ? 2 : 3) * 4 + forms.indexOf(request.form);
-  const order = requests.map((request, index) => ({ request, index }));
-  order.sort((a, b) => rank(a.request) - rank(b.request) || a.index - b.index);
   const placed: TagPlace[] = [];
-  for (const { request } of order) {
-    if (request.dragged) {
-      const size = request.sizes[request.form];
-      const x = request.anchor.x + request.dragged.dx - size.w / 2;
-      const y = request.anchor.y + request.dragged.dy - size.h / 2;
-      placed.push(placeOf(request, request.form, { x, y, ...size }, true, true));
-    } else placed.push(seat(request, sheet, placed));
+  const due: TagRequest[] = [];
+  for (const request of requests) {
+    if (!request.dragged) continue;
+    const size = request.sizes[request.form];
+    const x = request.anchor.x + request.dragged.dx - size.w / 2;
+    const y = request.anchor.y + request.dragged.dy - size.h / 2;
+    placed.push(placeOf(request, request.form, { x, y, ...size }, true, true));
   }
+  const held = requests.find((request) => request.inHand && !request.dragged);
+  if (held) placed.push(sameAgain(held, sheet, placed) ?? seat(held, sheet, placed));
+  for (const request of requests) {
+    if (request.dragged || request === held) continue;
+    const same = sameAgain(request, sheet, placed);
+    if (same) placed.push(same);
+    else due.push(request);
+  }
+  const size = (request: TagRequest) => forms.indexOf(request.form);
+  const order = due.map((request, index) => ({ request, index }));
+  order.sort((a, b) => size(a.request) - size(b.request) || a.index - b.index);
+  for (const { request } of order) placed.push(seat(request, sheet, placed));
   return new Map(placed.map((place) => [place.address, place]));
 }
