@@ -179,12 +179,7 @@ function likelyKind(document: CircuitDocument, ref: PortRef, place: Place): stri
   // At the pump itself first a junction's worth of protection, then the valve that directs.
   if (place === 'pump-line') return !around.relief ? 'relief-valve' : !around.valve ? 'directional-valve-4-3' : 'pressure-gauge';
   if (place === 'work') return around.actuator ? 'pressure-gauge' : 'cylinder';
-  if (place === 'actuator') {
-    const other = document.components.find(
-      (component) => component.kind === 'directional-valve-4-3' && hasOpenWorkPort(document, component.id),
-    );
-    return other ? 'junction' : 'directional-valve-4-3';
-  }
+  if (place === 'actuator') return 'directional-valve-4-3';
   return place === 'inlet' ? 'compensated-pump' : 'junction';
 }
 

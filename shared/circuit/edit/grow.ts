@@ -22,11 +22,17 @@ const hanging: readonly string[] = ['relief-valve', 'pressure-gauge'];
 const OUT = 4;
 const OVER = 12;
 
+/** A place on a line that is drawn already: where a junction shall sit on it (its middle), and what lies before it. */
+export interface OnLine extends Point {
+  readonly share: number;
+  readonly bendsBefore: number;
+}
+
 const refused = (document: CircuitDocument, problem: string): Grown => ({ document, componentId: null, problem });
 
-/** Puts a part behind an open port, or on the line of a taken one. A relief or gauge hangs on a junction, so that the line
- *  stays open for what comes next. */
-export function growFrom(document: CircuitDocument, ref: PortRef, kindId: string): Grown {
+/** Puts a part behind an open port, or on the line of a taken one, there at `onLine` where the caller knows how the line runs.
+ *  A relief or gauge hangs on a junction, so that the line stays open for what comes next. */
+export function growFrom(document: CircuitDocument, ref: PortRef, kindId: string, onLine?: OnLine): Grown {
   const port = findPort(document, ref);
   const kind = findKind(kindId);
   const place = portPlace(document, ref);
@@ -35,7 +41,7 @@ export function growFrom(document: CircuitDocument, ref: PortRef, kindId: string
   const entry = entryPort(port, kind, component && findKind(component.kind));
   if (!entry) return refused(document, `${portInWords(document, ref)} and ${kind.title.toLowerCase()} have nothing to join.`);
   if (port.medium === 'oil') {
-    if (!isOpen(document, ref) && component?.kind !== 'junction') return hangOnLine(document, ref, kindId, entry.id);
+    if (!isOpen(document, ref) && component?.kind !== 'junction') return hangOnLine(document, ref, kindId, entry.id, onLine);
     if (component?.kind === 'junction') return growFromJunction(document, ref.component, kindId, entry.id);
     if (hanging.includes(kindId) && port.role !== 'inlet' && port.role !== 'drain' && port.letter !== 'T') {
       return hangBehind(document, ref, place, place.side, kindId, entry.id);
@@ -69,8 +75,9 @@ function hangBehind(document: CircuitDocument, ref: PortRef, from: Point, side: 
 }
 
 /** From a junction's open arm that suits the part: below for what is entered from the top, above for what is entered from
- *  below, else onward. A part that hangs on a tee that already has two lines gets a further tee, so that the line stays open. */
-function growFromJunction(document: CircuitDocument, junctionId: string, kindId: string, entry: string): Grown {
+ *  below, else onward. A part that hangs on a tee that already has two lines gets a further tee, so that the line stays open;
+ *  on a `branch` off a line that is drawn already there is nothing to keep open. */
+function growFromJunction(document: CircuitDocument, junctionId: string, kindId: string, entry: string, branch = false): Grown {
   const symbol = symbolOf(kindId);
   const entrySide = symbol?.ports[entry]?.side ?? 'left';
   const hangs = hanging.includes(kindId);
@@ -82,7 +89,7 @@ function growFromJunction(document: CircuitDocument, junctionId: string, kindId:
   const place = portPlace(document, ref);
   if (!place) return refused(document, 'That port is not on the drawing.');
   const lines = document.lines.filter((line) => line.from.component === junctionId || line.to.component === junctionId).length;
-  if (hangs && (lines >= 2 || arm === 'a' || arm === 'b')) {
+  if (hangs && !branch && (lines >= 2 || arm === 'a' || arm === 'b')) {
     const onward = ['b', 'a', 'd', 'c'].map((port) => ({ component: junctionId, port })).find((end) => isOpen(document, end)) ?? ref;
     const from = portPlace(document, onward) ?? place;
     return hangBehind(document, onward, from, from.side, kindId, entry);
@@ -90,20 +97,25 @@ function growFromJunction(document: CircuitDocument, junctionId: string, kindId:
   return addAt(document, ref, place, place.side, kindId, entry);
 }
 
-/** A junction on the line of a port that is taken, near that port, and the part on it. */
-function hangOnLine(document: CircuitDocument, ref: PortRef, kindId: string, entry: string): Grown {
+/** A junction on the line of a port that is taken, and the part on it. */
+function hangOnLine(document: CircuitDocument, ref: PortRef, kindId: string, entry: string, onLine?: OnLine): Grown {
   const line = lineAt(document, ref);
   const place = portPlace(document, ref);
   if (!line || !place) return refused(document, 'That port is not on the drawing.');
+  const first = line.from.component === ref.component && line.from.port === ref.port;
+  const at = onLine ? { x: onLine.x - 1, y: onLine.y - 1 } : besidePort(document, place);
+  const share = onLine?.share ?? (first ? 0.2 : 0.8);
+  const split = splitLine(document, line.id, snapPoint(at), share, onLine?.bendsBefore ?? (first ? 0 : line.route.length));
+  if (!split.junctionId) return refused(document, 'The sheet is full: no room for a junction.');
+  const grown = growFromJunction(seatJunction(split.document, split.junctionId), split.junctionId, kindId, entry, true);
+  return grown.componentId ? grown : refused(document, grown.problem ?? 'The sheet is full.');
+}
+
+function besidePort(document: CircuitDocument, place: Point & { readonly side: Side }): Point {
   const out = sideSteps[place.side];
   const upright = place.side === 'top' || place.side === 'bottom';
   const wish = { x: place.x + (upright ? OVER : out.x * OVER) - 1, y: place.y + out.y * OUT - 1 };
-  const at = freePlace(document, wish, { width: 2, height: 2 }, upright ? { x: 1, y: 0 } : out);
-  const first = line.from.component === ref.component && line.from.port === ref.port;
-  const split = splitLine(document, line.id, snapPoint(at), first ? 0.2 : 0.8, first ? 0 : line.route.length);
-  if (!split.junctionId) return refused(document, 'The sheet is full: no room for a junction.');
-  const grown = growFromJunction(split.document, split.junctionId, kindId, entry);
-  return grown.componentId ? grown : refused(document, grown.problem ?? 'The sheet is full.');
+  return freePlace(document, wish, { width: 2, height: 2 }, upright ? { x: 1, y: 0 } : out);
 }
 
 /** A part from the drawer, not joined to anything, near the wished place. */

@@ -2,8 +2,8 @@ import { addComponent, mirrorParts, moveParts, turnParts } from '#shared/circuit
 import { copyParts, duplicateParts, pasteParts } from '#shared/circuit/edit/copy.ts';
 import { addCommand } from '#shared/circuit/edit/duty.ts';
 import { growFrom, putDown } from '#shared/circuit/edit/grow.ts';
-import { connect, connectToLine, isOpen, leaveShaft, lineAt } from '#shared/circuit/edit/joins.ts';
-import { portPlace, sideSteps } from '#shared/circuit/edit/place-parts.ts';
+import { connect, connectToLine, isOpen, joinProblem, leaveShaft, lineAt, openArm } from '#shared/circuit/edit/joins.ts';
+import { freePlace } from '#shared/circuit/edit/place-parts.ts';
 import { chosenInWords, planRemoval, removalList, removeItems } from '#shared/circuit/edit/removal.ts';
 import { seatJunction } from '#shared/circuit/edit/seat-junction.ts';
 import { addNote } from '#shared/circuit/edit/sheet.ts';
@@ -12,6 +12,7 @@ import { findComponent, findKind, kindOfComponent, nameInWords, portInWords } fr
 import { openPorts } from '#shared/circuit/open-ports.ts';
 import type { CircuitDocument, PortRef } from '#shared/circuit/schema.ts';
 import { useDocument } from '#src/stores/document-store.ts';
+import { branchPoint } from './branch-point.ts';
 import { partFocus, portFocus, say, useDrawing } from './drawing-store.ts';
 import type { LinePoint } from './line-point.ts';
 
@@ -28,7 +29,7 @@ function called(document: CircuitDocument, id: string): string {
 
 /** Puts a part behind a port and moves the focus to the next open port, so that one can go on. */
 export function growAt(ref: PortRef, kind: string) {
-  const grown = growFrom(present(), ref, kind);
+  const grown = growFrom(present(), ref, kind, branchPoint(present(), ref));
   if (!grown.componentId) return say(grown.problem ?? 'That cannot be joined there.');
   const where = portInWords(present(), ref);
   const flagged = withFirstFlags(grown.document, grown.componentId);
@@ -72,19 +73,24 @@ function withFirstFlags(document: CircuitDocument, id: string): { document: Circ
   };
 }
 
-/** Joins two ports; an end that is taken is branched near its port. */
+/** Joins two ports; an end that is taken is branched off its line. */
 export function joinPorts(from: PortRef, to: PortRef) {
   const document = present();
-  const branch = [from, to].find((ref) => lineAt(document, ref)) ?? to;
-  const place = portPlace(document, branch);
-  const out = place ? sideSteps[place.side] : { x: 0, y: 0 };
-  const at = place ? { x: place.x + 3 * out.x - 1, y: place.y + 3 * out.y - 1 } : { x: 0, y: 0 };
-  const joined = connect(document, from, to, at);
+  const joined = joinedTo(document, from, to) ?? joinedTo(document, to, from) ?? connect(document, from, to);
   if (joined.problem) return draw({ said: joined.problem, strip: null, preview: null, focus: portFocus(from) });
   const words = `${portInWords(document, from)} joined to ${portInWords(document, to)}`;
   put(seated(document, joined.document));
   const next = openPorts(joined.document).find((port) => !port.optional);
   draw({ strip: null, preview: null, said: words, focus: next ? portFocus(next) : partFocus(from.component) });
+}
+
+/** An open port joined to the line of a taken one, where that line has room; null where that is not the case. */
+function joinedTo(document: CircuitDocument, open: PortRef, taken: PortRef) {
+  if (joinProblem(document, open, taken) || !isOpen(document, open)) return null;
+  const line = lineAt(document, openArm(document, taken));
+  const point = branchPoint(document, taken);
+  if (!line || !point) return null;
+  return connectToLine(document, open, line.id, { x: point.x - 1, y: point.y - 1 }, point.share, point.bendsBefore);
 }
 
 /** Drops a line's end on another line. */
@@ -196,7 +202,8 @@ export function deleteNow(ids: readonly string[]) {
 }
 
 export function writeNote(at: { x: number; y: number }) {
-  const added = addNote(present(), { at, text: '', date: new Date().toISOString().slice(0, 10) });
+  const free = freePlace(present(), at, { width: 25, height: 8 });
+  const added = addNote(present(), { at: free, text: '', date: new Date().toISOString().slice(0, 10) });
   if (!added.noteId) return say('A sheet holds at most 100 notes.');
   put(added.document);
   useDocument.getState().select([added.noteId]);

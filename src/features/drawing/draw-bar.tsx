@@ -13,7 +13,7 @@ import { useDrawing } from './drawing-store.ts';
 import { fitSheet } from './fit-sheet.ts';
 import { MODULE } from './flow-model.ts';
 import { keyOf } from './problem-slips.tsx';
-import { applyCure, useDrawingProblems } from './problems.ts';
+import { applyCure, isMissing, useDrawingProblems } from './problems.ts';
 import { labelPart } from './selection-tools.tsx';
 
 /** The line above the sheet: undo and redo, what is on it, what is missing, the zoom. */
@@ -32,7 +32,6 @@ export function DrawBar({ room }: { readonly room: { readonly width: number; rea
         Redo
       </button>
       <Counts />
-      <span className="draw-bar-space" />
       <PartButtons />
       <button type="button" className="button" onClick={() => writeNote(middle())}>
         Note
@@ -81,7 +80,7 @@ function Counts() {
   const said = useDrawing((state) => state.said);
   const problems = useDrawingProblems();
   const [listed, setListed] = useState(false);
-  const missing = problems.filter((problem) => problem.severity === 'problem');
+  const missing = problems.filter(isMissing);
   const words = useMemo(() => restInWords(document, problems), [document, problems]);
   const parts = document.components.filter((component) => component.kind !== 'junction').length;
   return (
@@ -107,7 +106,9 @@ function Counts() {
       )}
       {problems.length === 0 && parts > 0 && <span>Ready to run</span>}
       <span className="draw-rest">{words}</span>
-      <span className="draw-said">{said}</span>
+      <span className="draw-said" title={said}>
+        {said}
+      </span>
       {listed && problems.length > 0 && <ProblemList problems={problems} onClose={() => setListed(false)} />}
     </div>
   );

@@ -56,7 +56,7 @@ function Stage({ children }: { readonly children?: ReactNode }) {
       <DrawBar room={room} />
       <section ref={sheet} className="draw-sheet" aria-label="The sheet" tabIndex={-1} {...keys}>
         <Sheet />
-        <ProblemSlips />
+        <ProblemSlips width={room.width} height={room.height} />
         <SelectionTools width={room.width} height={room.height} />
         <NextStrip width={room.width} height={room.height} />
         {empty && <EmptySheet onTaken={() => fitSheet(flow, room)} />}

@@ -14,6 +14,7 @@ import { ShapeView } from '#src/components/schematic/shape-view.tsx';
 import { SymbolView } from '#src/components/schematic/symbol-view.tsx';
 import { useDocument } from '#src/stores/document-store.ts';
 import { wordOf } from './actions.ts';
+import { branchPoint } from './branch-point.ts';
 import { useDrawing } from './drawing-store.ts';
 import { MODULE } from './flow-model.ts';
 import { cureGhosts, useDrawingProblems } from './problems.ts';
@@ -26,7 +27,10 @@ export function GhostLayer() {
   const strip = useDrawing((state) => state.strip);
   const preview = useDrawing((state) => state.preview);
   const problems = useDrawingProblems();
-  const grown = useMemo(() => (strip && preview ? growFrom(document, strip.ref, preview) : null), [document, strip, preview]);
+  const grown = useMemo(
+    () => (strip && preview ? growFrom(document, strip.ref, preview, branchPoint(document, strip.ref)) : null),
+    [document, strip, preview],
+  );
   const cures = useMemo(() => (strip ? [] : cureGhosts(document, problems)), [document, strip, problems]);
   return (
     <EdgeLabelRenderer>

@@ -97,7 +97,18 @@ function SlipField({ id, kind, text, label, most, onWritten }: Omit<SlipProps, '
   const [entry, setEntry] = useState(text);
   const field = useRef<HTMLTextAreaElement>(null);
   const set = useDrawing((state) => state.set);
-  useEffect(() => field.current?.focus(), []);
+  // The canvas hides a new slip until it has measured it, and what is hidden takes no focus.
+  useEffect(() => {
+    let tries = 0;
+    let frame = 0;
+    const take = () => {
+      field.current?.focus();
+      field.current?.select();
+      if (document.activeElement !== field.current && tries++ < 30) frame = requestAnimationFrame(take);
+    };
+    take();
+    return () => cancelAnimationFrame(frame);
+  }, []);
   const done = (next: string, refocus: boolean) => {
     useDocument.getState().edit(() => onWritten(next));
     set({ writing: null, focus: refocus ? partFocus(id) : null });
