@@ -116,7 +116,7 @@ export const crowdedCircuit: CircuitDocument = sample({
         range: bar(250),
         lag: milliseconds(50),
       },
-      { turn: 2 },
+      { turn: 2, mirror: true },
     ),
     part('J3', 'junction', [43, 26], {
       shape: choice('tee'),
@@ -142,11 +142,17 @@ export const crowdedCircuit: CircuitDocument = sample({
       ratedFlow: litres(60),
       ratedDrop: bar(5),
     }),
-    part('V4', 'throttle', [34, 14], {
-      opening: percent(25),
-      ratedFlow: litres(60),
-      ratedDrop: bar(6),
-    }),
+    part(
+      'V4',
+      'throttle',
+      [34, 14],
+      {
+        opening: percent(25),
+        ratedFlow: litres(60),
+        ratedDrop: bar(6),
+      },
+      { turn: 2, mirror: true },
+    ),
     part('J4', 'junction', [75, 14], {
       shape: choice('tee'),
     }),

@@ -43,7 +43,7 @@ export const liftStarter = sample({
     part(
       'A1',
       'cylinder',
-      [96, 23],
+      [98, 23],
       {
         bore: millimetres(50),
         rod: millimetres(28),
@@ -71,12 +71,12 @@ export const liftStarter = sample({
     pipe('L9', 'J2.b', 'V3.P', 2.5, 16),
     pipe('L10', 'V3.A', 'V4.A', 0.5, 16, [{ x: 77, y: 10 }]),
     pipe('L11', 'V4.B', 'A1.A', 1, 16, [
-      { x: 90, y: 10 },
-      { x: 90, y: 41 },
+      { x: 92, y: 10 },
+      { x: 92, y: 41 },
     ]),
     pipe('L12', 'A1.B', 'V3.B', 2, 16, [
-      { x: 93, y: 25 },
-      { x: 93, y: 14 },
+      { x: 95, y: 25 },
+      { x: 95, y: 14 },
       { x: 79, y: 14 },
     ]),
     pipe('L13', 'V3.T', 'T4.T', 1.5, 20),
