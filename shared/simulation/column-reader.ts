@@ -1,5 +1,6 @@
 import type { Block, ReadingSpec } from '../kinds/kind.ts';
 import type { Column } from './circuit.ts';
+import type { RowBuffer } from './row-buffer.ts';
 import type { CircuitSystem } from './system.ts';
 
 /** Writes one row of recorded numbers from the system's reading workspace. Pressures of ports are never below minus the
@@ -40,21 +41,23 @@ export class ColumnReader {
     });
   }
 
-  /** Fills data[at …] after `system.read`. Flows are positive into the component. */
-  write(data: Float64Array, at: number): void {
+  /** Appends a row after `system.read`. Flows are positive into the component. */
+  write(rows: RowBuffer, time: number): void {
+    const at = rows.add(time);
+    const { data, capacity } = rows;
     const w = this.system.reading;
     const floor = -this.system.circuit.run.atmosphere;
     const { pressureColumn, pressureNode, flowColumn, flowSlot, readingColumn, readingValue, readingBlock, readingInstance } = this;
-    for (let k = 0; k < pressureColumn.length; k++) data[at + pressureColumn[k]!] = Math.max(w.y[pressureNode[k]!]!, floor);
-    for (let k = 0; k < flowColumn.length; k++) data[at + flowColumn[k]!] = -w.balance[flowSlot[k]!]!;
+    for (let k = 0; k < pressureColumn.length; k++) data[at + capacity * pressureColumn[k]!] = Math.max(w.y[pressureNode[k]!]!, floor);
+    for (let k = 0; k < flowColumn.length; k++) data[at + capacity * flowColumn[k]!] = -w.balance[flowSlot[k]!]!;
     for (let k = 0; k < readingColumn.length; k++) {
-      data[at + readingColumn[k]!] = readingValue[k]!(readingBlock[k]!, readingInstance[k]!, w);
+      data[at + capacity * readingColumn[k]!] = readingValue[k]!(readingBlock[k]!, readingInstance[k]!, w);
     }
     const { lineColumn, lineTerms } = this;
     for (let k = 0; k < lineColumn.length; k++) {
       let sum = 0;
       for (const { slot, sign } of lineTerms[k]!) sum += sign * w.balance[slot]!;
-      data[at + lineColumn[k]!] = sum;
+      data[at + capacity * lineColumn[k]!] = sum;
     }
   }
 }

@@ -42,24 +42,20 @@ export class PhaseTracker {
     return totals;
   }
 
-  /** Takes in the rows recorded since the last call. The last row is kept open for the next call. */
+  /** Takes in the rows recorded since the last call. */
   fold(): void {
-    const { times, data, rows, columns } = this.rows;
+    const { times, rows } = this.rows;
     let totals = this.totals[this.totals.length - 1] ?? this.open(0);
+    let first = this.next;
     for (let r = this.next; r < rows; r++) {
-      const time = times[r]!;
-      const at = r * columns;
-      const dt = r > 0 ? time - times[r - 1]! : 0;
-      this.take(totals, data, at, columns, dt);
-      totals.to = time;
       const end = this.phases[this.totals.length - 1]?.to ?? Number.POSITIVE_INFINITY;
-      const more = r + 1 < rows ? times[r + 1]! : Number.POSITIVE_INFINITY;
-      if (time >= end && this.totals.length < this.phases.length) {
-        totals = this.open(time);
-        // Where an input jumps, the row before the jump ends the old phase and the row after it starts the new one.
-        if (more > time) this.take(totals, data, at, columns, 0);
-      }
+      if (times[r]! < end || this.totals.length >= this.phases.length) continue;
+      this.take(totals, first, r + 1);
+      totals = this.open(times[r]!);
+      // Where an input jumps, the row before the jump ends the old phase and the row after it starts the new one.
+      first = r + 1 < rows && times[r + 1] === times[r] ? r + 1 : r;
     }
+    this.take(totals, first, rows);
     this.next = rows;
   }
 
@@ -68,15 +64,33 @@ export class PhaseTracker {
     this.next = this.rows.rows;
   }
 
-  private take(totals: Totals, data: Float64Array, at: number, columns: number, dt: number): void {
-    const { min, max, area, end } = totals;
+  /** Rows first … last−1 into one phase. */
+  private take(totals: Totals, first: number, last: number): void {
+    if (last <= first) return;
+    const { times, data, columns, capacity } = this.rows;
+    const follows = first > 0 && times[first - 1]! >= totals.from;
     for (let c = 0; c < columns; c++) {
-      const value = data[at + c]!;
-      if (value < min[c]!) min[c] = value;
-      if (value > max[c]!) max[c] = value;
-      if (dt > 0) area[c]! += 0.5 * dt * (value + data[at - columns + c]!);
-      end[c] = value;
+      const base = c * capacity;
+      let min = totals.min[c]!;
+      let max = totals.max[c]!;
+      let area = totals.area[c]!;
+      let before = follows ? data[base + first - 1]! : data[base + first]!;
+      let from = follows ? times[first - 1]! : times[first]!;
+      for (let r = first; r < last; r++) {
+        const value = data[base + r]!;
+        const time = times[r]!;
+        if (value < min) min = value;
+        if (value > max) max = value;
+        area += 0.5 * (time - from) * (value + before);
+        before = value;
+        from = time;
+      }
+      totals.min[c] = min;
+      totals.max[c] = max;
+      totals.area[c] = area;
+      totals.end[c] = before;
     }
+    totals.to = times[last - 1]!;
   }
 
   summaries(channels: readonly ChannelPlan[]): PhaseSummary[] {

@@ -7,7 +7,6 @@ import type { CompiledCircuit } from './circuit.ts';
 import { ENGINE_VERSION } from './engine-version.ts';
 import { BitHash } from './hash.ts';
 import type { RunResult } from './result.ts';
-import { PLOT_ROWS } from './row-buffer.ts';
 import { StepRecorder } from './step-recorder.ts';
 import { CircuitSystem } from './system.ts';
 
@@ -115,7 +114,8 @@ function resultOf(
   recorder.phases.fold();
   const phases = recorder.phases.summaries(circuit.channels);
   const { rows } = recorder;
-  rows.thin(PLOT_ROWS);
+  rows.thinForPlot();
+  const left = pressureLeft(circuit, recorder, y);
   const columns = rows.split();
   const { counts } = integrator;
   const failure = status === 'failed' ? integrator.failure : null;
@@ -132,7 +132,7 @@ function resultOf(
     events: recorder.signals.events,
     phases,
     audit: recorder.audit.result(y),
-    pressureLeft: pressureLeft(circuit, recorder, y),
+    pressureLeft: left,
     statistics: { ...counts, states: circuit.size, nonzeros: circuit.symbolic.nonzeros },
     notes: circuit.notes,
     hash: hash.text(),
@@ -161,12 +161,11 @@ function pressureLeft(
 ): { net: string; label: string; pressure: number }[] {
   const { rows } = recorder;
   if (rows.rows === 0) return [];
-  const at = (rows.rows - 1) * rows.columns;
   const column = new Map(circuit.channels.map((channel) => [channel.address, channel.column]));
   return Array.from(circuit.netOfNode).flatMap((net, node) => {
     const { id, ports } = circuit.nets.oil[net]!;
     const pressure = y[node]!;
-    const shut = ports.every(({ address }) => Math.abs(rows.data[at + (column.get(`${address}.flow`) ?? 0)]!) < SHUT_FLOW);
+    const shut = ports.every(({ address }) => Math.abs(rows.latest(column.get(`${address}.flow`) ?? 0)) < SHUT_FLOW);
     if (pressure <= LEFT_PRESSURE || !shut) return [];
     const words = ports.map(({ component, port }) => portInWords(circuit.document, { component, port: port.id }));
     const label = words.length > 3 ? `${words.slice(0, 3).join(', ')} and ${words.length - 3} more` : words.join(', ');

@@ -27,9 +27,7 @@ export class StepRecorder {
   }
 
   private row(time: number): void {
-    // Adding may move the table, so the place comes first.
-    const at = this.rows.add(time);
-    this.reader.write(this.rows.data, at);
+    this.reader.write(this.rows, time);
   }
 
   /** State at the start of a segment: a row where the run starts or an input jumped. */

@@ -3,8 +3,9 @@
 
 interface Table {
   readonly times: Float64Array;
-  /** Row after row. */
+  /** Column after column, `capacity` apart. */
   readonly data: Float64Array;
+  readonly capacity: number;
   readonly rows: number;
   readonly columns: number;
 }
@@ -34,26 +35,27 @@ export function rowsToKeep(table: Table, limit: number): Int32Array {
   }
 }
 
-function markExtremes({ data, rows, columns }: Table, must: Uint8Array): Float64Array {
+function markExtremes({ data, capacity, rows, columns }: Table, must: Uint8Array): Float64Array {
   const ranges = new Float64Array(columns);
   for (let c = 0; c < columns; c++) {
-    let least = 0;
-    let most = 0;
-    for (let r = 1; r < rows; r++) {
-      const value = data[r * columns + c]!;
-      if (value < data[least * columns + c]!) least = r;
-      if (value > data[most * columns + c]!) most = r;
+    const base = c * capacity;
+    let least = base;
+    let most = base;
+    for (let at = base + 1; at < base + rows; at++) {
+      const value = data[at]!;
+      if (value < data[least]!) least = at;
+      if (value > data[most]!) most = at;
     }
-    must[least] = 1;
-    must[most] = 1;
-    ranges[c] = data[most * columns + c]! - data[least * columns + c]!;
+    must[least - base] = 1;
+    must[most - base] = 1;
+    ranges[c] = data[most]! - data[least]!;
   }
   return ranges;
 }
 
 /** One pass: from each kept row on, bounds on the slope of every column are narrowed until a row falls outside them. */
 function swing(table: Table, must: Uint8Array, ranges: Float64Array, share: number, low: Float64Array, high: Float64Array): number[] {
-  const { times, data, rows, columns } = table;
+  const { times, data, capacity, rows, columns } = table;
   const kept = [0];
   let anchor = 0;
   low.fill(Number.NEGATIVE_INFINITY);
@@ -62,7 +64,7 @@ function swing(table: Table, must: Uint8Array, ranges: Float64Array, share: numb
     const dt = times[r]! - times[anchor]!;
     let inside = dt > 0;
     for (let c = 0; inside && c < columns; c++) {
-      const slope = (data[r * columns + c]! - data[anchor * columns + c]!) / dt;
+      const slope = (data[c * capacity + r]! - data[c * capacity + anchor]!) / dt;
       if (slope < low[c]! || slope > high[c]!) inside = false;
     }
     if (!inside && anchor !== r - 1) {
@@ -80,7 +82,7 @@ function swing(table: Table, must: Uint8Array, ranges: Float64Array, share: numb
     }
     const inverse = 1 / (times[r]! - times[anchor]!);
     for (let c = 0; c < columns; c++) {
-      const rise = data[r * columns + c]! - data[anchor * columns + c]!;
+      const rise = data[c * capacity + r]! - data[c * capacity + anchor]!;
       const slack = share * ranges[c]!;
       const lower = (rise - slack) * inverse;
       const upper = (rise + slack) * inverse;
