@@ -11,8 +11,8 @@ export function loadAxes(frame: Frame): Shape[] {
   const pressure = preferredUnit('pressure', preferences);
   const flow = preferredUnit('flow', preferences);
   const shapes: Shape[] = [];
-  const across = roundTicks(0, fromSi(ends.pressure, pressure), Math.max(2, Math.round(plot.w / 62)));
-  const up = roundTicks(0, fromSi(ends.flow, flow), Math.max(2, Math.round(plot.h / 42)));
+  const across = roundTicks(0, fromSi(ends.pressure, pressure), Math.min(10, Math.max(2, Math.round(plot.w / 62))));
+  const up = roundTicks(0, fromSi(ends.flow, flow), Math.min(8, Math.max(2, Math.round(plot.h / 42))));
   const digitsAcross = tickDigits(across);
   const digitsUp = tickDigits(up);
   const base = plot.y + plot.h;

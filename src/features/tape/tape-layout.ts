@@ -11,8 +11,9 @@ export interface TapeMeasures {
   readonly bareMarks: boolean;
 }
 
-export function tapeMeasures(lanes: number): TapeMeasures {
+export function tapeMeasures(lanes: number, isNarrow: boolean): TapeMeasures {
   if (lanes === 1) return { left: 78, right: 14, rowHeight: 26, shortFlags: true, bareMarks: true };
+  if (isNarrow) return { left: 108, right: 16, rowHeight: 26, shortFlags: true, bareMarks: false };
   if (lanes <= 3) return { left: 116, right: 20, rowHeight: 25, shortFlags: true, bareMarks: false };
   return { left: 150, right: 26, rowHeight: 23, shortFlags: false, bareMarks: false };
 }

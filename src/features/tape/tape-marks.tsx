@@ -13,10 +13,21 @@ export interface TapeMarksProps {
 
 const SIZE = 16;
 
-/** Pins of the runs and numerals of findings, between and below the flags. Picking one moves the cursor there. */
+/** Pins of the runs and numerals of findings, between and below the flags. Clicking one moves the cursor there. They lie where
+ *  their moments are, often closer than a finger is wide, so they are no buttons: the keyboard goes from one to the next by
+ *  brackets and digits, and a screen reader has them all in the table. */
 export function TapeMarks({ marks, rowHeight, showTime, onPick, onFinding }: TapeMarksProps) {
   return (
-    <div className="tape-marks">
+    <div
+      className="tape-marks"
+      aria-hidden="true"
+      onClick={(event) => {
+        const mark = (event.target as HTMLElement).closest<HTMLElement>('[data-time]');
+        if (!mark) return;
+        onPick(Number(mark.dataset.time));
+        if (mark.dataset.number) onFinding?.(Number(mark.dataset.number));
+      }}
+    >
       {marks.map((mark) => {
         const pin = mark.group?.pins[0];
         const many = mark.group && mark.group.pins.length > 1 ? mark.group : null;
@@ -31,14 +42,12 @@ export function TapeMarks({ marks, rowHeight, showTime, onPick, onFinding }: Tap
               />
             )}
             {mark.group && pin && (
-              <button
-                type="button"
+              <span
                 className="tape-pin"
+                data-time={pin.time}
                 data-side={mark.side}
                 title={`${groupWords(mark.group)}, ${showTime(pin.time)}`}
-                aria-label={`${groupWords(mark.group)}, ${showTime(pin.time)}`}
                 style={{ color: `var(--case-${pin.ink})` }}
-                onClick={() => onPick(pin.time)}
               >
                 <span className="tape-pin-shape">
                   {pin.verdict ? (
@@ -49,22 +58,19 @@ export function TapeMarks({ marks, rowHeight, showTime, onPick, onFinding }: Tap
                     </svg>
                   )}
                 </span>
-              </button>
+              </span>
             )}
             {mark.numerals.map((numeral, k) => (
-              <button
+              <span
                 key={numeral.number}
-                type="button"
                 className="tape-numeral"
+                data-time={numeral.time}
+                data-number={numeral.number}
                 style={{ left: mark.group ? (many ? many.to - mark.x : 0) + SIZE / 2 + 2 + k * 20 : -9 + k * 20 }}
-                aria-label={`Finding ${numeral.number}, ${showTime(numeral.time)}`}
-                onClick={() => {
-                  onPick(numeral.time);
-                  onFinding?.(numeral.number);
-                }}
+                title={`Finding ${numeral.number}, ${showTime(numeral.time)}`}
               >
                 <FindingNumeral number={numeral.number} size={18} />
-              </button>
+              </span>
             ))}
             {mark.words && mark.group && (
               <span
@@ -75,7 +81,6 @@ export function TapeMarks({ marks, rowHeight, showTime, onPick, onFinding }: Tap
                     ? { left: (many ? many.to - mark.x : 0) + SIZE / 2 + 3 + mark.numerals.length * 20 }
                     : { right: (many ? mark.x - many.from : 0) + SIZE / 2 + 3 }
                 }
-                aria-hidden="true"
               >
                 {mark.words}
               </span>

@@ -5,6 +5,7 @@ import { kindOf } from '#shared/kinds/registry.ts';
 import { tapeBand } from '#shared/pictures/tape-band.ts';
 import { pinsOf } from '#shared/pictures/tape-pins.ts';
 import { useFormat } from '#src/components/use-format.ts';
+import { useLayout } from '#src/lib/layout.ts';
 import { useSize } from '#src/lib/use-size.ts';
 import { useCursor } from '#src/stores/cursor-store.ts';
 import { useDocument } from '#src/stores/document-store.ts';
@@ -61,7 +62,8 @@ export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true 
   const [sheet, setSheet] = useState<TapeSheet>(null);
   const [editing, setEditing] = useState<string | null>(null);
   const [plotRef, size] = useSize<HTMLDivElement>();
-  const measures = tapeMeasures(lanes);
+  const isNarrow = useLayout() === 'phone';
+  const measures = useMemo(() => tapeMeasures(lanes, isNarrow), [lanes, isNarrow]);
   const plan = useMemo(() => planTape(model, size, measures.right, focusAddress), [model, size, measures.right, focusAddress]);
   const { geometry } = plan;
 
@@ -149,7 +151,7 @@ export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true 
       }
       onKeyDown={handleKey}
     >
-      <RunControls compact={lanes < 5} words={lanes > 1} duration={model.duration} />
+      <RunControls compact={lanes < 5 || isNarrow} words={lanes > 1} duration={model.duration} />
       <div className="tape-band">
         <TapeMarks marks={band.marks} rowHeight={band.rowHeight} top={0} showTime={seconds} onPick={pick} onFinding={onFinding} />
         <TapeFlags
@@ -178,7 +180,14 @@ export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true 
           </button>
         )}
       </div>
-      <TapePlot ref={plotRef} model={model} plan={plan} overlayReadings={lanes === 5} verticals={verticals} hidden={sheet === 'table'} />
+      <TapePlot
+        ref={plotRef}
+        model={model}
+        plan={plan}
+        overlayReadings={lanes === 5 && !isNarrow}
+        verticals={verticals}
+        hidden={sheet === 'table'}
+      />
       <TapeAxis model={model} geometry={geometry} />
       <TapeFoot document={document} model={model} sheet={sheet} onSheet={setSheet} room={lanes} />
       <EventTable document={document} model={model} findings={findings} visible={sheet === 'table'} />
