@@ -3,8 +3,9 @@ import type { Integrator } from '../numerics/solver.ts';
 import type { EnergyAudit } from './result.ts';
 import type { CircuitSystem } from './system.ts';
 
-/** Boole's rule on quarter points: weights over 90. */
-const WEIGHTS = [7, 32, 12, 32, 7] as const;
+/** Simpson's rule on start, middle and end of a step: weights over 6. */
+const WEIGHTS = [1, 4, 1] as const;
+const PLACES = 3;
 
 /** Residuals of a run in which next to nothing moves are related to this work [J] and volume [m³]. */
 const LEAST_WORK = 1;
@@ -19,11 +20,11 @@ export class Audit {
   private readonly count: number;
   private readonly names: string[] = [];
   private readonly out: Powers = { supplied: 0, delivered: 0, heat: 0, stored: 0 };
-  /** At each of the five places of a step: sums, heat by instance, and capacity, pressure and inflow of every node. */
-  private readonly supplied = new Float64Array(5);
-  private readonly delivered = new Float64Array(5);
-  private readonly stored = new Float64Array(5);
-  private readonly moved = new Float64Array(5);
+  /** At each of the three places of a step: sums, heat by instance, and capacity, pressure and inflow of every node. */
+  private readonly supplied = new Float64Array(PLACES);
+  private readonly delivered = new Float64Array(PLACES);
+  private readonly stored = new Float64Array(PLACES);
+  private readonly moved = new Float64Array(PLACES);
   private readonly heat: Float64Array[];
   private readonly capacity: Float64Array[];
   private readonly pressure: Float64Array[];
@@ -40,18 +41,18 @@ export class Audit {
     this.nodes = circuit.nodes;
     for (const { block } of circuit.blocks) this.names.push(...block.componentIds);
     this.count = this.names.length;
-    const five = (length: number): Float64Array[] => Array.from({ length: 5 }, () => new Float64Array(length));
-    this.heat = five(this.count);
-    this.capacity = five(this.nodes);
-    this.pressure = five(this.nodes);
-    this.inflow = five(this.nodes + 1);
+    const places = (length: number): Float64Array[] => Array.from({ length: PLACES }, () => new Float64Array(length));
+    this.heat = places(this.count);
+    this.capacity = places(this.nodes);
+    this.pressure = places(this.nodes);
+    this.inflow = places(this.nodes + 1);
     this.slope = new Float64Array(system.length);
     this.heatTotal = new Float64Array(this.count);
     this.volumeError = new Float64Array(this.nodes);
     this.startSpeeds = circuit.start.slice(circuit.nodes, circuit.nodes + circuit.shafts);
   }
 
-  /** Takes the powers at place k = 0 … 4 of a step, after `system.read` there. */
+  /** Takes the powers at place k = 0, 1, 2 (start, middle, end) of a step, after `system.read` there. */
   sample(k: number): void {
     const { system, out, nodes } = this;
     const { circuit, reading: w } = system;
@@ -88,19 +89,19 @@ export class Audit {
     }
   }
 
-  /** Adds the step whose five places were sampled, up to place q of the integrator's last step, and makes its end the next start. */
+  /** Adds the step whose three places were sampled, up to place q of the integrator's last step, and makes its end the next start. */
   commit(integrator: Integrator, q: number): void {
     const { total, slope, nodes, volumeError, heatTotal } = this;
     const length = (integrator.to - integrator.from) * q;
-    for (let k = 0; k < 5; k++) {
-      const weight = (length * WEIGHTS[k]!) / 90;
+    for (let k = 0; k < PLACES; k++) {
+      const weight = (length * WEIGHTS[k]!) / 6;
       total.supplied += weight * this.supplied[k]!;
       total.delivered += weight * this.delivered[k]!;
       total.stored += weight * this.stored[k]!;
       total.moved += weight * this.moved[k]!;
       const heat = this.heat[k]!;
       for (let i = 0; i < heat.length; i++) heatTotal[i]! += weight * heat[i]!;
-      integrator.denseSlope((q * k) / 4, slope);
+      integrator.denseSlope((q * k) / 2, slope);
       const capacity = this.capacity[k]!;
       const pressure = this.pressure[k]!;
       const inflow = this.inflow[k]!;
@@ -110,12 +111,12 @@ export class Audit {
         volumeError[i]! += weight * (inflow[i]! - taken);
       }
     }
-    for (const five of [this.heat, this.capacity, this.pressure, this.inflow]) {
-      const first = five[0]!;
-      five[0] = five[4]!;
-      five[4] = first;
+    for (const list of [this.heat, this.capacity, this.pressure, this.inflow]) {
+      const first = list[0]!;
+      list[0] = list[2]!;
+      list[2] = first;
     }
-    for (const five of [this.supplied, this.delivered, this.stored, this.moved]) five[0] = five[4]!;
+    for (const list of [this.supplied, this.delivered, this.stored, this.moved]) list[0] = list[2]!;
   }
 
   /** The accounts, given the state at the end. */

@@ -67,7 +67,7 @@ export class StepRecorder {
       const time = whole ? integrator.to : integrator.from + q * length;
       system.read(time, whole ? integrator.after : y);
       this.row(time);
-      this.audit.sample(k);
+      if (k % 2 === 0) this.audit.sample(k / 2);
       tripped = this.signals.look(integrator, end * ((k - 1) / 4), q) ?? tripped;
       if (tripped !== null && end === 1) return tripped;
     }
