@@ -1,5 +1,6 @@
 import { checkDocument } from '#shared/circuit/check-document.ts';
 import { demoCircuit } from '#shared/circuit/samples/demo.ts';
+import type { CircuitDocument } from '#shared/circuit/schema.ts';
 import { type Draft, holdDraft, readDraft, writeDraft, writeLastMoment } from '#src/lib/draft.ts';
 import { useCursor } from '#src/stores/cursor-store.ts';
 import { useDocument } from '#src/stores/document-store.ts';
@@ -40,7 +41,7 @@ function restore(draft: Draft): boolean {
   return true;
 }
 
-function present(): Draft {
+function present(): Draft & { readonly document: CircuitDocument } {
   const { document, activeCase, overlays } = useDocument.getState();
   return { document, activeCase, overlays, savedAt: Date.now() };
 }
@@ -49,23 +50,33 @@ function present(): Draft {
 export function keepDraft(): () => void {
   let mine = false;
   let ready = false;
-  let pending: ReturnType<typeof setTimeout> | undefined;
   let stopped = false;
+  let pending: ReturnType<typeof setTimeout> | undefined;
+  /** What this tab last kept or opened, and when. */
+  let keptDocument: CircuitDocument | null = null;
+  let keptAt = 0;
   let last = useDocument.getState();
+  const { setKeeping, setTakeOver, setOpenOther, setNotice } = useKeeping.getState();
 
+  function refused(error: unknown) {
+    setKeeping('not-kept', error instanceof Error ? error.message : String(error));
+  }
   async function save() {
     pending = undefined;
-    if (!mine) return;
+    if (!mine || stopped) return;
+    const draft = present();
     try {
-      await writeDraft(present());
-      if (!pending) useKeeping.getState().setKeeping('kept');
+      await writeDraft(draft);
+      keptDocument = draft.document;
+      keptAt = draft.savedAt;
+      if (!pending) setKeeping('kept');
     } catch (error) {
-      useKeeping.getState().setKeeping('not-kept', error instanceof Error ? error.message : String(error));
+      refused(error);
     }
   }
   function schedule() {
     if (!mine || !ready || pending !== undefined) return;
-    useKeeping.getState().setKeeping('saving');
+    setKeeping('saving');
     pending = setTimeout(() => void save(), DELAY);
   }
   const stopListening = useDocument.subscribe((state) => {
@@ -78,27 +89,73 @@ export function keepDraft(): () => void {
   }
   window.addEventListener('pagehide', putAway);
 
+  function take(draft: Draft) {
+    ready = false;
+    restore(draft);
+    last = useDocument.getState();
+    keptDocument = last.document;
+    keptAt = draft.savedAt;
+    ready = true;
+  }
+  function settle() {
+    setTakeOver(null);
+    setOpenOther(null);
+    schedule();
+  }
+  /** This tab may keep again. What another tab has kept meanwhile is never overwritten in silence: it is opened here when
+   *  nothing was changed here, else the person chooses. */
+  async function regain() {
+    const draft = await readDraft().catch(() => null);
+    if (!mine || stopped) return;
+    if (!draft || draft.savedAt <= keptAt) return settle();
+    if (useDocument.getState().document === keptDocument) {
+      take(draft);
+      setNotice('The circuit as the other tab kept it is in hand now.');
+      return settle();
+    }
+    mine = false;
+    setKeeping('other-tab');
+    setTakeOver(() => {
+      mine = true;
+      settle();
+    });
+    setOpenOther(() => {
+      mine = true;
+      take(draft);
+      settle();
+    });
+  }
   const lock = holdDraft((has) => {
+    const before = mine;
     mine = has;
     if (!ready) return;
-    useKeeping.getState().setTakeOver(has ? null : lock.takeOver);
-    if (has) schedule();
-    else useKeeping.getState().setKeeping('other-tab');
+    if (has && !before) void regain();
+    else if (!has) {
+      setKeeping('other-tab');
+      setTakeOver(() => {
+        keptAt = Number.POSITIVE_INFINITY;
+        lock.takeOver();
+      });
+    }
   });
 
   void readDraft()
-    .then((draft) => (draft && !stopped ? restore(draft) : false))
+    .then((draft) => {
+      if (!draft || stopped || !restore(draft)) return false;
+      keptAt = draft.savedAt;
+      return true;
+    })
     .catch((error: unknown) => {
-      useKeeping.getState().setKeeping('not-kept', error instanceof Error ? error.message : String(error));
+      refused(error);
       return false;
     })
     .then((restored) => {
       if (stopped) return;
       if (!restored) openDemo();
       last = useDocument.getState();
+      keptDocument = last.document;
       ready = true;
-      const { keeping, setKeeping, setTakeOver } = useKeeping.getState();
-      if (keeping === 'loading') setKeeping(mine ? 'kept' : 'other-tab');
+      if (useKeeping.getState().keeping === 'loading') setKeeping(mine ? 'kept' : 'other-tab');
       setTakeOver(mine ? null : lock.takeOver);
     });
 

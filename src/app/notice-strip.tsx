@@ -7,13 +7,25 @@ export function NoticeStrip() {
   const setNotice = useKeeping((state) => state.setNotice);
   const keeping = useKeeping((state) => state.keeping);
   const takeOver = useKeeping((state) => state.takeOver);
+  const openOther = useKeeping((state) => state.openOther);
   return (
     <>
       {keeping === 'other-tab' && takeOver && (
         <div className="notice-strip no-print" role="status">
-          <p>
-            <strong>Open in another tab.</strong> That tab keeps the circuit of this device; what you change here is not kept.
-          </p>
+          {openOther ? (
+            <p>
+              <strong>Two tabs changed this circuit.</strong> The other one’s is kept on this device; what stands here is not.
+            </p>
+          ) : (
+            <p>
+              <strong>Open in another tab.</strong> That tab keeps the circuit of this device; what you change here is not kept.
+            </p>
+          )}
+          {openOther && (
+            <button type="button" className="button" onClick={openOther}>
+              Open the kept one
+            </button>
+          )}
           <button type="button" className="button" onClick={takeOver}>
             Keep this one instead
           </button>

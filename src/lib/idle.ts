@@ -4,9 +4,11 @@ export function loadLater(loads: readonly (() => Promise<unknown>)[], delay = 15
   let timer: ReturnType<typeof setTimeout> | undefined;
   const begin = () => {
     stopListening();
-    timer = setTimeout(() => {
-      for (const load of loads) load().catch(() => undefined);
-    }, delay);
+    timer = setTimeout(load, delay);
+  };
+  const load = () => {
+    if (navigator.onLine) for (const one of loads) one().catch(() => undefined);
+    else window.addEventListener('online', load, { once: true });
   };
   const stopListening = () => {
     window.removeEventListener('pointerdown', begin);
@@ -16,6 +18,7 @@ export function loadLater(loads: readonly (() => Promise<unknown>)[], delay = 15
   window.addEventListener('keydown', begin);
   return () => {
     stopListening();
+    window.removeEventListener('online', load);
     clearTimeout(timer);
   };
 }

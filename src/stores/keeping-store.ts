@@ -11,9 +11,12 @@ export interface KeepingState {
   readonly notice: string | null;
   /** Takes the keeping over from another tab; null while this tab has it. */
   readonly takeOver: (() => void) | null;
+  /** Opens what another tab kept, when both tabs have changed the circuit. */
+  readonly openOther: (() => void) | null;
   setKeeping: (keeping: Keeping, reason?: string) => void;
   setNotice: (notice: string | null) => void;
   setTakeOver: (takeOver: (() => void) | null) => void;
+  setOpenOther: (openOther: (() => void) | null) => void;
 }
 
 export const useKeeping = create<KeepingState>()((set) => ({
@@ -21,15 +24,17 @@ export const useKeeping = create<KeepingState>()((set) => ({
   reason: null,
   notice: null,
   takeOver: null,
+  openOther: null,
   setKeeping: (keeping, reason) => set({ keeping, reason: reason ?? null }),
   setNotice: (notice) => set({ notice }),
   setTakeOver: (takeOver) => set({ takeOver }),
+  setOpenOther: (openOther) => set({ openOther }),
 }));
 
 export const keepingWords: Record<Keeping, string> = {
   loading: 'opening\u2026',
   kept: 'kept on this device',
   saving: 'kept on this device',
-  'other-tab': 'open in another tab, not kept here',
+  'other-tab': 'not kept here',
   'not-kept': 'not kept: this device offers no storage',
 };

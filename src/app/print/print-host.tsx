@@ -8,8 +8,8 @@ export function PrintHost() {
   useEffect(() => {
     const paper = window.matchMedia('print');
     const begin = () => flushSync(() => setPrinting(true));
-    const end = () => setPrinting(false);
-    const follow = () => (paper.matches ? setPrinting(true) : setPrinting(false));
+    const end = () => setPrinting(paper.matches);
+    const follow = () => setPrinting(paper.matches);
     window.addEventListener('beforeprint', begin);
     window.addEventListener('afterprint', end);
     paper.addEventListener('change', follow);

@@ -6,11 +6,11 @@ import type { Finding } from '#shared/findings/finding.ts';
 import { PhraseText } from '#src/components/quantity.tsx';
 import { takeCase } from '#src/stores/apply-value.ts';
 import { useDocument } from '#src/stores/document-store.ts';
-import { useRuns } from '#src/stores/run-store.ts';
+import { remedyKey, useRuns } from '#src/stores/run-store.ts';
 
 /** What would change it: words, then the setting found by running. */
 export function RemedyWords({ finding }: { readonly finding: Finding }) {
-  const result = useRuns((state) => state.remedies[finding.id]);
+  const result = useRuns((state) => state.remedies[remedyKey(finding)]);
   const { remedy } = finding;
   if (!remedy) return null;
   return (
@@ -43,7 +43,7 @@ function triedAs(document: CircuitDocument, finding: Finding, change: CaseChange
 
 /** One primary action: the found setting as a new case, or the word that it has been tried. */
 export function RemedyAction({ finding }: { readonly finding: Finding }) {
-  const result = useRuns((state) => state.remedies[finding.id]);
+  const result = useRuns((state) => state.remedies[remedyKey(finding)]);
   const document = useDocument((state) => state.document);
   if (!result || result === 'seeking' || !result.found || !result.change) return null;
   const { change } = result;
