@@ -9,6 +9,8 @@ export function perMinute(limit: number, what: string): RequestHandler {
     limit,
     standardHeaders: 'draft-8',
     legacyHeaders: false,
+    // A forwarding header from a proxy that is not trusted is simply not believed.
+    validate: { xForwardedForHeader: false },
     handler: (request, _response, next) => {
       const reset = 'rateLimit' in request ? (request.rateLimit as { resetTime?: Date }).resetTime : undefined;
       const retryAfter = Math.max(1, Math.ceil(((reset?.getTime() ?? 0) - Date.now()) / 1000));

@@ -36,6 +36,7 @@ export function securityHeaders(secure: boolean): RequestHandler {
     },
     strictTransportSecurity: secure ? { maxAge: 15_552_000 } : false,
     crossOriginEmbedderPolicy: false,
+    xFrameOptions: { action: 'deny' },
     referrerPolicy: { policy: 'no-referrer' },
   });
 }
