@@ -1,4 +1,5 @@
 import type { Component } from '../circuit/schema.ts';
+import { kindOf } from '../kinds/registry.ts';
 import { crackingPressure } from '../kinds/relief-valve/laws.ts';
 import type { Base, DriveLoad, FindingContext } from './context.ts';
 import { reliefsOf } from './context.ts';
@@ -10,16 +11,34 @@ import { say } from './phrase.ts';
 
 type Remedy = NonNullable<Finding['remedy']>;
 
-/** Lowest rated pressure on the nets that a pump's pressure can stand on [Pa]; null when nobody has entered any. */
+/** Lowest rated pressure on the nets that a pump's pressure can stand on [Pa], a gauge's range among them; null when nobody
+ *  has entered any. */
 export function lowestRating(base: Base, port: string): { readonly component: string; readonly pressure: number } | null {
   const nets = base.reach.loaded(port);
   let lowest: { component: string; pressure: number } | null = null;
   for (const component of base.seen.components) {
-    const rating = base.plate(component.id).given('ratedPressure');
+    const rating = ratingOf(base, component);
     if (rating === null || !touches(base, component, nets)) continue;
     if (!lowest || rating < lowest.pressure) lowest = { component: component.id, pressure: rating };
   }
   return lowest;
+}
+
+/** Pressure rating of a component [Pa], null where none is known. */
+function ratingOf(base: Base, component: Component): number | null {
+  const plate = base.plate(component.id);
+  return component.kind === 'pressure-gauge' ? plate.number('range') : plate.given('ratedPressure');
+}
+
+/** Parts on the same nets for which nobody has entered a rated pressure. */
+function unrated(base: Base, port: string): string[] {
+  const nets = base.reach.loaded(port);
+  return base.seen.components
+    .filter(
+      (component) => kindOf(component.kind)?.parameters.some((spec) => spec.id === 'ratedPressure') && ratingOf(base, component) === null,
+    )
+    .filter((component) => touches(base, component, nets))
+    .map((component) => base.name(component.id));
 }
 
 function touches(base: Base, component: Component, nets: ReadonlySet<string>): boolean {
@@ -57,8 +76,10 @@ export function compensatorUp(context: FindingContext, pump: string, words: Phra
   const high = Math.min(plate.number('mostCompensator'), ...cracks, rating ? rating.pressure : Number.POSITIVE_INFINITY);
   const low = plate.number('compensatorPressure');
   if (!(high > low)) return { words: say(words, ' There is no room for it under the relief and the ratings.') };
+  const unknown = unrated(context, `${pump}.outlet`);
+  const first = unknown.length > 0 ? ` No rated pressure is entered for ${unknown.slice(0, 4).join(', ')}: read the plates first.` : '';
   return {
-    words,
+    words: say(words, first),
     seek: { target: pump, field: 'compensatorPressure', quantity: 'pressure', low, high, want: 'smallest', goal: 'within-limits' },
   };
 }

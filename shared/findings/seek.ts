@@ -2,7 +2,7 @@ import { findCase, firstCase } from '../circuit/effective.ts';
 import type { CaseChange, CircuitDocument } from '../circuit/schema.ts';
 import type { Assessment, Finding, Phrase, Seek, SeekResult } from './finding.ts';
 import { LEAST_STALL_MARGIN } from './house-rules.ts';
-import { figure, margin, multiple, say, share } from './phrase.ts';
+import { figure, margin, moment, multiple, say, share } from './phrase.ts';
 import { baseDocumentOf, settableValues } from './settable.ts';
 
 /** Runs one case of a document to its assessment; null when the circuit could not run. */
@@ -28,16 +28,32 @@ export function seekRemedy(document: CircuitDocument, caseId: string, finding: F
 
   // From the end that must meet the goal towards the end that is wanted.
   const order = seek.want === 'largest' ? values.map((_, i) => i) : values.map((_, i) => values.length - 1 - i);
-  if (order.length === 0 || !meets(order[0]!)) return { found: false, words: impossible(seek, values), runs };
   let good = 0;
   let bad = order.length;
+  if (order.length === 0) return { found: false, words: impossible(seek, values), runs };
+  if (!meets(order[0]!)) {
+    // The goal may lie inside the range only (too little at one end, too much at the other): walk from the wanted end.
+    const last = seek.want === 'smallest' ? findFirst(order, meets) : -1;
+    if (last < 0) return { found: false, words: impossible(seek, values), runs };
+    good = last;
+    bad = last + 1;
+  }
   while (bad - good > 1) {
     const middle = (good + bad) >> 1;
     if (meets(order[middle]!)) good = middle;
     else bad = middle;
   }
   const index = order[good]!;
-  return { found: true, change: changeOf(seek, values[index]!), words: predicted(seek, values[index]!, assess(index)!), runs };
+  return { found: true, change: changeOf(seek, values[index]!), words: predicted(document, seek, values[index]!, assess(index)!), runs };
+}
+
+/** Most runs spent on walking. */
+const MOST_WALKED = 24;
+
+/** Position in `order` of the value nearest the wanted end that meets the goal; −1 when none of the first ones does. */
+function findFirst(order: readonly number[], meets: (index: number) => boolean): number {
+  for (let i = order.length - 1; i > 0 && order.length - 1 - i < MOST_WALKED; i--) if (meets(order[i]!)) return i;
+  return -1;
 }
 
 const TRIAL = 'seek-trial';
@@ -76,7 +92,8 @@ export function reaches(goal: Seek['goal'], assessment: Assessment | null): bool
   }
 }
 
-function predicted(seek: Seek, value: number, assessment: Assessment): Phrase {
+/** What is to be expected at the found value: yardsticks, the time of the job, and what stays open. */
+function predicted(document: CircuitDocument, seek: Seek, value: number, assessment: Assessment): Phrase {
   const motor = assessment.yardsticks[0];
   const load =
     motor && motor.stallMargin !== null
@@ -90,12 +107,15 @@ function predicted(seek: Seek, value: number, assessment: Assessment): Phrase {
           ' of nameplate',
         )
       : say('');
+  const job = document.requirements.find((requirement) => requirement.measure === 'time to reach');
+  const time = assessment.requirements.find((entry) => entry.id === job?.id)?.value;
   const missed = assessment.requirements.filter((entry) => !entry.met);
   const left = assessment.findings.find((finding) => finding.severity === 0);
   return say(
     'At ',
     figure(value, seek.quantity, { address: `${seek.target}.${seek.field}` }),
     load,
+    typeof time === 'number' ? say(', job done in ', moment(time)) : '',
     '. ',
     left
       ? say('Still open: ', left.headline, '.')

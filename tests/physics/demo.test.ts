@@ -219,3 +219,18 @@ describe('samples run and balance', () => {
     expect(verdict('lift')).toBe('within-limits');
   });
 });
+
+describe('a compensator set too low', () => {
+  const document = changed({ 'P1.compensatorPressure': 140 * bar, 'P1.maxVolumeStop': 16 * cubic });
+
+  it('lets the rod stop short, and is raised only as far as the force needs, under the relief and every rating', () => {
+    const low = evaluate(document, 'A');
+    expect(low.assessment.verdict.id).toBe('rod-stops-short');
+    const finding = low.assessment.findings.find((entry) => entry.rule === 'rod-stops-short')!;
+    const result = seekRemedy(document, 'A', finding, (trial, id) => evaluate(trial, id).assessment);
+    expect(result.found).toBe(true);
+    const setting = result.change!.value as number;
+    expect(setting).toBeGreaterThan(NEEDED / (Math.PI * 0.0315 ** 2));
+    expect(setting).toBeLessThanOrEqual((215 * bar) / 1.054 - LEAST_RELIEF_GAP);
+  });
+});

@@ -47,7 +47,7 @@ function trips(context: FindingContext, drive: DriveLoad): Finding[] {
     {
       id: `will-trip:${motor}`,
       rule: 'will-trip',
-      severity: yardsticks.stalled ? 1 : 0,
+      severity: yardsticks.stalled || drive.running === null ? 1 : 0,
       verdict: 'trips',
       caseId: context.caseId,
       component: motor,
@@ -73,9 +73,16 @@ function trips(context: FindingContext, drive: DriveLoad): Finding[] {
             current(ultimate),
             ' and no more for ever.',
           ),
-      remedy: yardsticks.stalled
-        ? { words: say('Cure the stall first; a higher dial only lets the motor burn.') }
-        : lighten(context, drive, 'not-tripping'),
+      remedy:
+        yardsticks.stalled || drive.running === null
+          ? {
+              words: say(
+                yardsticks.stalled
+                  ? 'Cure the stall first; a higher dial only lets the motor burn.'
+                  : 'Cure the start first; a higher dial only lets the motor burn.',
+              ),
+            }
+          : lighten(context, drive, 'not-tripping'),
       caution: AFTER_A_TRIP,
     },
   ];
