@@ -53,7 +53,7 @@ async function check(name, action) {
 }
 
 async function tool([file, ...args]) {
-  const { code, output } = await runTool(process.execPath, [file, ...args]);
+  const { code, output } = await runTool(process.execPath, [file, ...args], { env: { ...process.env, NO_COLOR: '1', FORCE_COLOR: '0' } });
   if (code !== 0) say(output.trim());
   return code === 0;
 }
