@@ -79,13 +79,14 @@ describe('moving parts', () => {
     expect(roles(at(0) ?? []).some((role) => role.endsWith('-on'))).toBe(false);
   });
   it('pushes the relief arrow from beside the ports onto them', () => {
-    const x = (lift: number) => (find(symbols['relief-valve'].moving?.(state({ lift })), 'relief-arrow') as { points: number[] }).points[0];
+    const x = (lift: number) =>
+      (find(symbols['relief-valve'].moving?.(state({ lift })), 'relief-arrow') as unknown as { points: number[] }).points[0];
     expect(x(0)).toBe(2);
     expect(x(1)).toBe(symbols['relief-valve'].ports.P?.x);
   });
   it('flattens the stroke arrow as the pump destrokes', () => {
     const rise = (stroke: number) => {
-      const shaft = find(symbols['compensated-pump'].moving?.(state({ stroke })), 'stroke-arrow') as { points: number[] };
+      const shaft = find(symbols['compensated-pump'].moving?.(state({ stroke })), 'stroke-arrow') as unknown as { points: number[] };
       const [x1 = 0, y1 = 0, x2 = 0, y2 = 0] = shaft.points;
       return (y1 - y2) / (x2 - x1);
     };

@@ -10,6 +10,7 @@ import {
   type Viewport,
 } from 'reactflow';
 import { setTagPlace } from '#shared/circuit/edit/sheet.ts';
+import type { TagPlace } from '#shared/pictures/tag-slots.ts';
 import { useFormat } from '#src/components/use-format.ts';
 import { type Layout, useLayout, useTouch } from '#src/lib/layout.ts';
 import { useSize } from '#src/lib/use-size.ts';
@@ -19,6 +20,7 @@ import { benchNodeTypes } from './bench-nodes.tsx';
 import { FlowList, SpokenList } from './flow-list.tsx';
 import { InkKey, KEY_HEIGHT, KEY_WIDTH } from './ink-key.tsx';
 import { LineReading } from './line-reading.tsx';
+import { steadyNodes } from './steady.ts';
 import { TurnWheel, WHEEL_HEIGHT, WHEEL_WIDTH } from './turn-wheel.tsx';
 import { type BenchLayout, useBenchLayout } from './use-bench-layout.ts';
 import { ZoomButtons } from './zoom-buttons.tsx';
@@ -80,7 +82,7 @@ function Drawing({ onOpen }: Required<BenchDrawingProps>) {
         )}
       </div>
       {tag && wheelBelow && <TurnWheel spec={tag.spec} state={tag.state} wide />}
-      {phone ? <FlowList tags={bench.tags} onOpen={onOpen} /> : <SpokenList tags={bench.tags} />}
+      {phone ? <FlowList tags={bench.tags} onOpen={onOpen} /> : <SpokenList />}
     </div>
   );
 }
@@ -118,16 +120,23 @@ function Flow({ bench, width, height, zoom, touch, onZoom, onOpen }: FlowProps) 
   opened.current = onOpen;
   const open = useCallback((id: string) => opened.current(id), []);
 
+  const formerPlaces = useRef<readonly TagPlace[]>([]);
+  const samePlaces = (next: readonly TagPlace[]) => {
+    const before = formerPlaces.current;
+    if (before.length !== next.length || next.some((place, k) => place !== before[k])) formerPlaces.current = next;
+    return formerPlaces.current;
+  };
+  const formerNodes = useRef<ReadonlyMap<string, Node>>(new Map());
   const nodes = useMemo((): Node[] => {
     const fixed = { draggable: false, selectable: false, connectable: false, focusable: false };
     const at = (id: string, x: number, y: number) => (moving?.id === id ? { x: moving.x, y: moving.y } : { x: x * 10, y: y * 10 });
-    const places = tags.map(({ place }) => {
+    const places = tags.map(({ place }): TagPlace => {
       if (moving?.id !== `tag ${place.address}`) return place;
       const box = { ...place.box, x: moving.x / 10, y: moving.y / 10 };
       const from = { x: place.string.from.x + box.x - place.box.x, y: place.string.from.y + box.y - place.box.y };
       return { ...place, box, string: { ...place.string, from } };
     });
-    return [
+    const next: Node[] = [
       {
         id: 'sheet',
         type: 'sheet',
@@ -136,7 +145,7 @@ function Flow({ bench, width, height, zoom, touch, onZoom, onOpen }: FlowProps) 
         ...fixed,
         data: { document, caseId: activeCase, routes, textScale: small ? 0 : Math.max(1, grow), onOpen: open },
       },
-      { id: 'strings', type: 'strings', position: { x: 0, y: 0 }, zIndex: 1, ...fixed, data: { places, grow, inHand } },
+      { id: 'strings', type: 'strings', position: { x: 0, y: 0 }, zIndex: 1, ...fixed, data: { places: samePlaces(places), grow, inHand } },
       ...readings.map(({ spec, box }) => ({
         id: `reading ${spec.id}`,
         type: 'reading',
@@ -168,6 +177,9 @@ function Flow({ bench, width, height, zoom, touch, onZoom, onOpen }: FlowProps) 
         },
       })),
     ];
+    const steady = steadyNodes(formerNodes.current, next);
+    formerNodes.current = new Map(steady.map((node) => [node.id, node]));
+    return steady;
   }, [document, activeCase, routes, small, grow, readings, tags, inHand, ink, touch, open, format, moving]);
 
   function follow(changes: NodeChange[]) {

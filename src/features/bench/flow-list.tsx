@@ -6,6 +6,8 @@ import { SymbolIcon } from '#src/components/schematic/symbol-icon.tsx';
 import { useFormat } from '#src/components/use-format.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { type FlowRow, flowRows, rowWords } from './flow-rows.ts';
+import { tagSpecs } from './tag-specs.ts';
+import { tagState } from './tag-state.ts';
 import { tagValue } from './tag-words.ts';
 import type { BenchLayout } from './use-bench-layout.ts';
 
@@ -111,30 +113,32 @@ const LiveRow = memo(function LiveRow({ row }: { readonly row: FlowRow }) {
   );
 });
 
-/** The drawing for those who hear it: the same list as plain words, renewed once the cursor has rested. */
-export function SpokenList({ tags }: Pick<FlowListProps, 'tags'>) {
-  const document = useDocument((state) => state.document);
+/** The drawing for those who hear it: the same list as plain words, renewed once the cursor and the screws have rested. */
+export function SpokenList() {
   const format = useFormat();
   const [moment, setMoment] = useState(presentMoment);
   useEffect(() => {
     let timer: ReturnType<typeof setTimeout> | undefined;
-    const stop = followMoment((next) => {
+    const later = () => {
       clearTimeout(timer);
-      timer = setTimeout(() => setMoment(next), 300);
-    });
+      timer = setTimeout(() => setMoment({ ...presentMoment() }), 300);
+    };
+    const stops = [followMoment(later), useDocument.subscribe(later)];
     return () => {
       clearTimeout(timer);
-      stop();
+      for (const stop of stops) stop();
     };
   }, []);
-  const rows = useMemo(() => flowRows(document), [document]);
+  const { document, activeCase } = useDocument.getState();
+  const specs = tagSpecs(document);
   return (
     <ul className="visually-hidden" aria-label={`Parts in flow order at ${format.quantity(moment.time, 'time', { digits: 2 }).text}`}>
-      {rows.map((row) => {
+      {flowRows(document).map((row) => {
         const { value, unit, note } = rowWords(row, moment, format);
-        const screws = tags
-          .filter(({ spec }) => spec.component === row.component.id)
-          .map(({ spec, state }) => `${spec.label} ${tagValue(spec, state, format).text}`);
+        const screws = specs.flatMap((spec) => {
+          const state = spec.component === row.component.id ? tagState(document, activeCase, spec) : null;
+          return state ? [`${spec.label} ${tagValue(spec, state, format).text}`] : [];
+        });
         return (
           <li key={row.component.id}>{[row.title, `${value} ${unit}`.trim(), note, ...screws].filter((part) => part !== '').join(', ')}</li>
         );

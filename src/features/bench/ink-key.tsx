@@ -28,15 +28,12 @@ function keyAddress(document: CircuitDocument): string | null {
 /** The line above the drawing and the ladder of the pressure ink, with a pointer at the present pressure. */
 export const InkKey = memo(function InkKey({ plain }: { readonly plain?: boolean }) {
   const format = useFormat();
-  const document = useDocument((state) => state.document);
-  const activeCase = useDocument((state) => state.activeCase);
+  const address = useDocument((state) => keyAddress(state.document));
+  const ink = useDocument((state) => findCase(state.document, state.activeCase)?.ink ?? 0);
   const inkScale = useRuns((state) => state.inkScale);
   const words = useRef<HTMLSpanElement>(null);
   const when = useRef<HTMLElement>(null);
   const pointer = useRef<SVGPathElement>(null);
-  const address = keyAddress(document);
-  const active = findCase(document, activeCase);
-  const ink = active?.ink ?? 0;
 
   useMoment(({ time, run, at, inkScale: scale }: Moment) => {
     if (when.current) when.current.textContent = `At ${format.quantity(time, 'time', { digits: 2 }).text}`;

@@ -8,7 +8,7 @@ import { placePoint } from '#shared/symbols/place.ts';
 import { symbolOf } from '#shared/symbols/registry.ts';
 import { LineView } from '#src/components/schematic/line-view.tsx';
 import { ShaftsView } from '#src/components/schematic/shaft-view.tsx';
-import { SymbolView } from '#src/components/schematic/symbol-view.tsx';
+import { SymbolView, type SymbolViewProps } from '#src/components/schematic/symbol-view.tsx';
 import { useJoinedPorts } from '#src/components/schematic/use-routes.ts';
 
 export interface SheetViewProps {
@@ -28,49 +28,74 @@ export const SheetView = memo(function SheetView({ document, caseId, routes, tex
   const joined = useJoinedPorts(document);
   const values = useSteadyValues(document, caseId);
   const press = useRef<ReturnType<typeof setTimeout> | undefined>(undefined);
-  const opening = (id: string) => ({
-    onDoubleClick: (event: { stopPropagation: () => void }) => {
-      event.stopPropagation();
-      onOpen(id);
-    },
-    onPointerDown: (event: { pointerType: string }) => {
-      if (event.pointerType === 'mouse') return;
-      clearTimeout(press.current);
-      press.current = setTimeout(() => onOpen(id), LONG_PRESS);
-    },
-    onPointerUp: () => clearTimeout(press.current),
-    onPointerMove: (event: { movementX: number; movementY: number }) => {
-      if (Math.abs(event.movementX) + Math.abs(event.movementY) > 3) clearTimeout(press.current);
-    },
-    onPointerCancel: () => clearTimeout(press.current),
-  });
+  const hold = (event: { pointerType: string; target: EventTarget }) => {
+    if (event.pointerType === 'mouse') return;
+    const id = openedBy(event.target);
+    clearTimeout(press.current);
+    if (id) press.current = setTimeout(() => onOpen(id), LONG_PRESS);
+  };
+  const release = () => clearTimeout(press.current);
   return (
     <svg className="bench-sheet" width="1" height="1" overflow="visible" aria-hidden="true">
-      <g transform="scale(10)">
+      <g
+        role="presentation"
+        transform="scale(10)"
+        onDoubleClick={(event) => {
+          const id = openedBy(event.target);
+          if (id) onOpen(id);
+        }}
+        onPointerDown={hold}
+        onPointerUp={release}
+        onPointerCancel={release}
+        onPointerMove={(event) => {
+          if (Math.abs(event.movementX) + Math.abs(event.movementY) > 3) release();
+        }}
+      >
         <ShaftsView components={document.components} shafts={document.shafts} />
         {document.lines.map((line) => {
           const route = routes.get(line.id);
-          if (!route) return null;
-          return (
-            <g key={line.id} {...opening(line.id)}>
-              <path d={filletPath(route.points, FILLET)} className="line-hit" />
-              <LineView line={line} route={route} live />
-            </g>
-          );
+          return route && <SheetLine key={line.id} line={line} route={route} />;
         })}
         {document.components.map((component) => (
-          <g
+          <SheetPart
             key={component.id}
-            transform={`translate(${component.at.x} ${component.at.y})`}
-            data-component={component.id}
-            {...opening(component.id)}
-          >
-            <SymbolView component={component} values={values(component.id)} joined={joined(component.id)} live textScale={textScale} />
-          </g>
+            component={component}
+            values={values(component.id)}
+            joined={joined(component.id)}
+            textScale={textScale}
+          />
         ))}
         {textScale > 0 && document.components.map((component) => <Code key={component.id} component={component} textScale={textScale} />)}
       </g>
     </svg>
+  );
+});
+
+/** Id of the component or line under the pointer. */
+function openedBy(target: EventTarget): string | null {
+  return target instanceof Element ? (target.closest('[data-open]')?.getAttribute('data-open') ?? null) : null;
+}
+
+const SheetLine = memo(function SheetLine({
+  line,
+  route,
+}: {
+  readonly line: CircuitDocument['lines'][number];
+  readonly route: RoutedLine;
+}) {
+  return (
+    <g data-open={line.id}>
+      <path d={filletPath(route.points, FILLET)} className="line-hit" />
+      <LineView line={line} route={route} live />
+    </g>
+  );
+});
+
+const SheetPart = memo(function SheetPart({ component, values, joined, textScale }: Omit<SymbolViewProps, 'live'>) {
+  return (
+    <g transform={`translate(${component.at.x} ${component.at.y})`} data-component={component.id} data-open={component.id}>
+      <SymbolView component={component} values={values} joined={joined} live textScale={textScale} />
+    </g>
   );
 });
 

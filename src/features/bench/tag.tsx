@@ -47,9 +47,9 @@ export const Tag = memo(function Tag({ spec, state, form, eyelet, ink, inHand, t
   });
   const onKeyDown = useTurnKeys({ spec, onRefused: setRefusal, onOpen: open, onType: type });
   const wheel = useTurnWheel<HTMLFieldSetElement>(spec, setRefusal);
-  const document = useDocument((store) => store.document);
+  const plate = useDocument((store) => plateVoltage(store.document, spec));
   const value = tagValue(spec, state, format);
-  const pinned = document.tagPlaces[spec.address]?.pinned ?? false;
+  const pinned = useDocument((store) => store.document.tagPlaces[spec.address]?.pinned ?? false);
   const title = tagTitle(spec);
   const above = aboveRating(state);
   const share = state.max > state.min ? (state.value - state.min) / (state.max - state.min) : 0;
@@ -107,7 +107,7 @@ export const Tag = memo(function Tag({ spec, state, form, eyelet, ink, inHand, t
             <button type="button" className="tag-name nodrag" tabIndex={inHand ? 0 : -1} title="Nameplate" onClick={open}>
               {title}
             </button>
-            <span className="tag-note">{tagNote(spec, state, ink, pinned, plateVoltage(document, spec), format)}</span>
+            <span className="tag-note">{tagNote(spec, state, ink, pinned, plate, format)}</span>
           </div>
           {typing === null ? (
             <button

@@ -10,6 +10,7 @@ import { type Corner, chooseFit } from './bench-fit.ts';
 import { bodiesOf, growth, legsOf, placeReadings, seatTags, type View, visibleBox } from './bench-layout.ts';
 import { keepPlaces } from './bench-places.ts';
 import { type ReadingSpec, readingSpecs } from './reading-specs.ts';
+import { sameContent } from './steady.ts';
 import { type TagSpec, tagSpecs } from './tag-specs.ts';
 import { isFull, type TagState, tagState } from './tag-state.ts';
 
@@ -47,13 +48,21 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
   const routes = useRoutes(document);
   const { components, lines, shafts } = document;
 
-  const specs = useMemo(() => tagSpecs({ ...document, components, lines, shafts }), [document, components, lines, shafts]);
+  const formerSpecs = useRef(new Map<string, TagSpec>());
+  const specs = useMemo(() => {
+    const next = tagSpecs({ ...document, components, lines, shafts }).map((spec) =>
+      sameContent(formerSpecs.current.get(spec.address), spec),
+    );
+    formerSpecs.current = new Map(next.map((spec) => [spec.address, spec]));
+    return next;
+    // Cases change no tag's place or name.
+  }, [components, lines, shafts]);
   // Routes are laid anew exactly when something on the sheet moves.
   const sheet = useMemo(() => {
-    const bodies = bodiesOf(document, caseId, routes);
+    const bodies = bodiesOf(document, document.cases[0]?.id ?? caseId, routes);
     return { bodies, legs: legsOf(routes), readings: readingSpecs(document) };
     // Not on every document: a value that changes nothing on the sheet must not move tags.
-  }, [routes, caseId]);
+  }, [routes]);
 
   // The view is chosen when the sheet or its region changes, never while a screw is turned.
   const fit = useMemo(() => {
@@ -80,11 +89,14 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
     return placeReadings(sheet.readings, sheet.bodies, sheet.legs, grow, blocked, frame);
   }, [sheet, grow, small, blocked, frame]);
 
+  const former = useRef(new Map<string, TagState>());
   const states = useMemo(() => {
     const found: { spec: TagSpec; state: TagState; form: TagForm; chip: string }[] = [];
     for (const spec of specs) {
-      const state = tagState(document, caseId, spec);
-      if (!state) continue;
+      const now = tagState(document, caseId, spec);
+      if (!now) continue;
+      const state = sameContent(former.current.get(spec.address), now);
+      former.current.set(spec.address, state);
       const form: TagForm = small ? 'chip' : isFull(document, spec, inHand) ? 'full' : 'compact';
       found.push({ spec, state, form, chip: format.quantity(state.value, spec.quantity).value });
     }
