@@ -1,5 +1,5 @@
 import './drawing.css';
-import { type ReactNode, useEffect, useRef } from 'react';
+import { type ReactNode, useEffect, useLayoutEffect, useRef } from 'react';
 import { ReactFlowProvider, useReactFlow } from 'reactflow';
 import { useSize } from '#src/lib/use-size.ts';
 import { useDocument } from '#src/stores/document-store.ts';
@@ -30,6 +30,7 @@ function Stage({ children }: { readonly children?: ReactNode }) {
   const said = useDrawing((state) => state.said);
   const keys = useDrawKeys({ in: () => void flow.zoomIn(), out: () => void flow.zoomOut(), fit: () => fitSheet(flow, room) });
   useFocusWhenDrawn(sheet);
+  const kept = useKeptFocus(sheet);
   useEffect(
     () => () =>
       useDrawing
@@ -54,7 +55,18 @@ function Stage({ children }: { readonly children?: ReactNode }) {
   return (
     <div className="drawing-stage">
       <DrawBar room={room} />
-      <section ref={sheet} className="draw-sheet" aria-label="The sheet" tabIndex={-1} {...keys}>
+      <section
+        ref={sheet}
+        className="draw-sheet"
+        aria-label="The sheet"
+        tabIndex={-1}
+        {...keys}
+        onFocus={kept.onFocus}
+        onBlur={(event) => {
+          keys.onBlur();
+          kept.onBlur(event);
+        }}
+      >
         <Sheet />
         <ProblemSlips width={room.width} height={room.height} />
         <SelectionTools width={room.width} height={room.height} />
@@ -90,4 +102,22 @@ function useFocusWhenDrawn(sheet: React.RefObject<HTMLElement | null>) {
     look();
     return () => cancelAnimationFrame(frame);
   }, [focus, sheet]);
+}
+
+/** When the thing that had the focus leaves the sheet (undo, delete), the sheet itself takes it, so that the next key still acts. */
+function useKeptFocus(sheet: React.RefObject<HTMLElement | null>) {
+  const document = useDocument((state) => state.document);
+  const within = useRef(false);
+  // biome-ignore lint/correctness/useExhaustiveDependencies: looked at after every change of the circuit
+  useLayoutEffect(() => {
+    if (within.current && globalThis.document.activeElement === globalThis.document.body) sheet.current?.focus({ preventScroll: true });
+  }, [document]);
+  return {
+    onFocus: () => {
+      within.current = true;
+    },
+    onBlur: (event: React.FocusEvent) => {
+      if (event.relatedTarget && !sheet.current?.contains(event.relatedTarget as Node)) within.current = false;
+    },
+  };
 }

@@ -78,7 +78,7 @@ export function PartsDrawer({ room }: { readonly room: { readonly width: number;
                 onTake={(byKey) => take(kind.id, byKey)}
                 onPointerDown={(event) => {
                   if (event.button !== 0) return;
-                  event.currentTarget.setPointerCapture(event.pointerId);
+                  if ('setPointerCapture' in event.currentTarget) event.currentTarget.setPointerCapture(event.pointerId);
                   drag.current = { kind: kind.id, x: event.clientX, y: event.clientY, out: false };
                 }}
                 onPointerMove={handleMove}

@@ -33,7 +33,7 @@ export function PortRing({ componentId, port, place, state, reachable }: PortRin
       id={port.id}
       type="source"
       position={positions[place.side]}
-      className={`ring ring-${state}`}
+      className={`port-ring ring-${state}`}
       style={{ left: place.x * MODULE, top: place.y * MODULE }}
       role="button"
       tabIndex={shown ? 0 : -1}

@@ -1,4 +1,4 @@
-import { type KeyboardEvent, useRef } from 'react';
+import { type KeyboardEvent, useEffect, useRef } from 'react';
 import { useDocument } from '#src/stores/document-store.ts';
 import { openNameplate } from '#src/stores/nameplate-store.ts';
 import {
@@ -75,14 +75,25 @@ export function useDrawKeys(zoom: { in: () => void; out: () => void; fit: () => 
     moving.current = false;
     useDocument.getState().endGesture();
   }
+  useEffect(() => {
+    // Undo and redo also act while nothing on the page has the focus.
+    const onWindow = (event: globalThis.KeyboardEvent) => {
+      if (event.target !== document.body || !(event.ctrlKey || event.metaKey)) return;
+      const act = historyOf(event);
+      if (!act) return;
+      event.preventDefault();
+      act();
+    };
+    window.addEventListener('keydown', onWindow);
+    return () => window.removeEventListener('keydown', onWindow);
+  }, []);
   return { onKeyDown, onKeyUp, onBlur: stopMoving };
 }
 
 function commandOf(event: KeyboardEvent, ids: readonly string[]): (() => void) | null {
-  const { undo, redo } = useDocument.getState();
+  const history = historyOf(event);
+  if (history) return history;
   const key = event.key.toLowerCase();
-  if (key === 'z') return event.shiftKey ? redo : undo;
-  if (key === 'y') return redo;
   if (key === 'a') return selectAll;
   if (key === 'v') return pasteClip;
   if (ids.length === 0) return null;
@@ -94,6 +105,13 @@ function commandOf(event: KeyboardEvent, ids: readonly string[]): (() => void) |
     };
   }
   return null;
+}
+
+function historyOf(event: Pick<KeyboardEvent, 'key' | 'shiftKey'>): (() => void) | null {
+  const { undo, redo } = useDocument.getState();
+  const key = event.key.toLowerCase();
+  if (key === 'z') return event.shiftKey ? redo : undo;
+  return key === 'y' ? redo : null;
 }
 
 function toggle(id: string) {
