@@ -147,7 +147,7 @@ function nodeVolumes(
     if (node < 0 || volume[node]! >= LEAST_VOLUME) return;
     volume[node] = LEAST_VOLUME;
     const first = net.ports[0] as NetPort;
-    if (net.ports.length < 2) return;
+    if (net.ports.every((port) => port.lines.length === 0)) return;
     notes.push({
       severity: 'assumption',
       code: 'least-volume',

@@ -161,8 +161,11 @@ function openPort(document: CircuitDocument, component: Component, entry: NetPor
   const problem = (code: string, message: string, label: string, action: 'add-drive' | 'join'): Problem[] => [
     { severity: 'problem', code, message, ...ref, cure: { label, action, ...ref } },
   ];
-  if (entry.port.medium === 'shaft')
-    return problem('no-drive', `${Called(component)} has no drive: nothing turns its shaft.`, 'Add a motor', 'add-drive');
+  if (entry.port.medium === 'shaft') {
+    return entry.port.role === 'outlet'
+      ? problem('drives-nothing', `${Called(component)} drives nothing: its shaft is not coupled.`, 'Couple it', 'join')
+      : problem('no-drive', `${Called(component)} has no drive: nothing turns its shaft.`, 'Add a motor', 'add-drive');
+  }
   return problem('open-port', `${words} is open: nothing is joined to it.`, 'Join it', 'join');
 }
 

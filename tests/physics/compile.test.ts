@@ -44,6 +44,10 @@ describe('compiling', () => {
     });
   });
 
+  it('says of a motor on its own that it drives nothing', () => {
+    expect(problemsOf(smallCircuit(['M1 electric-motor'], []))[0]?.message).toBe('The motor M1 drives nothing: its shaft is not coupled.');
+  });
+
   it('says that a relief has no way to tank', () => {
     const document = smallCircuit(
       ['M1 electric-motor', 'P1 compensated-pump', 'V1 relief-valve', 'V2 throttle', 'T1 tank', 'T3 tank'],
