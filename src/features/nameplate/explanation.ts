@@ -1,8 +1,12 @@
 import { effectiveValue } from '#shared/circuit/effective.ts';
+import { effectiveDocument } from '#shared/circuit/effective-document.ts';
+import { inputIds, inputProfiles } from '#shared/circuit/input-profiles.ts';
 import { findComponent, findKind, findParameter, nameInWords } from '#shared/circuit/kind-lookup.ts';
+import { profileValue } from '#shared/circuit/profile.ts';
 import type { CircuitDocument } from '#shared/circuit/schema.ts';
 import type { Assessment, Phrase } from '#shared/findings/finding.ts';
 import { verdictWords } from '#shared/findings/finding.ts';
+import { runConstants } from '#shared/fluid/run-constants.ts';
 import { channelOf, type RunResult, valueAt } from '#shared/simulation/result.ts';
 import type { QuantityId } from '#shared/units/quantities.ts';
 import { fieldSpec, targetWord } from '#src/lib/field-specs.ts';
@@ -54,11 +58,25 @@ function given(context: ExplainContext, target: string, field: string): ExplainI
   return { label: spec.label, value: shown, source: row.changed ? 'typed in this case' : row.source, address: `plate:${target}.${field}` };
 }
 
+/** An input that the duty may move: its value at the cursor, from the case and the commands so far. */
+function commanded(context: ExplainContext, componentId: string, id: string): ExplainInput | null {
+  const seen = effectiveDocument(context.document, context.caseId);
+  const component = findComponent(seen, componentId);
+  const kind = component && findKind(component.kind);
+  const spec = kind?.inputs.find((entry) => entry.id === id);
+  if (!component || !kind || !spec) return null;
+  const profile = inputProfiles(seen, component, kind, runConstants(seen.fluid, seen.supply, seen.site))[inputIds(kind).indexOf(id)];
+  if (!profile) return null;
+  return { label: spec.label, value: figure(profileValue(profile, context.time), spec.quantity), source: 'the duty, at the cursor' };
+}
+
 /** An input named by a reading's explanation: a parameter of the component, another of its readings, or a supply value. */
 function inputOf(context: ExplainContext, componentId: string, id: string): ExplainInput {
-  const own = given(context, componentId, id) ?? given(context, 'supply', id) ?? given(context, 'fluid', id);
-  if (own) return own;
-  const address = id.includes('.') ? id : `${componentId}.${id}`;
+  const plate =
+    given(context, componentId, id) ?? given(context, 'supply', id) ?? given(context, 'fluid', id) ?? commanded(context, componentId, id);
+  if (plate) return plate;
+  const own = `${componentId}.${id}`;
+  const address = context.run && !channelOf(context.run, own) && channelOf(context.run, id) ? id : own;
   const component = findComponent(context.document, componentId);
   const spec = component && findKind(component.kind)?.readings.find((entry) => entry.id === id);
   const channel = context.run ? channelOf(context.run, address) : undefined;
