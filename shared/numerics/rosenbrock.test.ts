@@ -245,6 +245,21 @@ describe('Rodas4P', () => {
     expect(none.times).toHaveLength(0);
   });
 
+  it('lets a state decay to nothing without getting stuck in vanishing numbers', () => {
+    const decay: Problem = {
+      size: 2,
+      f: (_t, y) => [-50 * y[0]! + 20 * y[1]!, -30 * y[1]!],
+      j: () => [
+        [-50, 20],
+        [0, -30],
+      ],
+    };
+    const { outcome, integrator, y } = solve(decay, [1, 1], 0, 1000, 1e-6, { longestStep: 0.25 });
+    expect(outcome).toBe('end');
+    expect(integrator.counts.rejected).toBeLessThan(20);
+    expect([...y]).toEqual([0, 0]);
+  });
+
   it('says where it sticks instead of throwing', () => {
     const burst = solve({ size: 1, f: (_t, y) => [y[0]! * y[0]!], j: (_t, y) => [[2 * y[0]!]] }, [1], 0, 2, 1e-6);
     expect(burst.outcome).toBe('failed');

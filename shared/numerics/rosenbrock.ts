@@ -49,6 +49,8 @@ const {
   H25,
 } = rodas4p;
 
+const VANISHING = 1e-200;
+
 /** Rodas4P: one exact Jacobian and one factorisation a step, a new factorisation only after a rejection. Needs the exact
  *  Jacobian (it is not a W-method). Deterministic: + − × ÷ and Math.sqrt only. */
 export class Rosenbrock implements Integrator {
@@ -246,10 +248,12 @@ export class Rosenbrock implements Integrator {
     return true;
   }
 
-  /** Coefficients of the dense output of the step just accepted. */
+  /** Coefficients of the dense output of the step just accepted; states that have all but vanished become zero, because numbers
+   *  near the smallest a computer knows lose their digits and are slow. */
   private finish(): void {
-    const { k1, k2, u1, u2, u3, u4, u5 } = this;
+    const { after, k1, k2, u1, u2, u3, u4, u5 } = this;
     for (let i = 0; i < this.system.size; i++) {
+      if (Math.abs(after[i]!) < VANISHING) after[i] = 0;
       k1[i] = H11 * u1[i]! + H12 * u2[i]! + H13 * u3[i]! + H14 * u4[i]!;
       k2[i] = H21 * u1[i]! + H22 * u2[i]! + H23 * u3[i]! + H24 * u4[i]! + H25 * u5[i]!;
     }

@@ -6,6 +6,9 @@ import { analyse, type SymbolicLu } from './symbolic-lu.ts';
 /** Largest residual of a row, relative to the sum of its terms, with which the sparse factors are still used. */
 const RESIDUAL_LIMIT = 1e-6;
 
+/** Residuals below this are the rounding of numbers that have all but vanished. */
+const VANISHING = 1e-250;
+
 /** Sparse LU of shift·I − J with a fixed pattern and diagonal pivots; when a pivot is unusable or the residual of a checked
  *  solution is too large, the same matrix is factored densely with pivoting. */
 export class SparseLu implements LinearSolver {
@@ -119,7 +122,7 @@ export class SparseLu implements LinearSolver {
       terms[rows[s]!]! += Math.abs(term);
     }
     for (let i = 0; i < size; i++) {
-      if (!(Math.abs(residual[i]!) <= RESIDUAL_LIMIT * terms[i]!)) return false;
+      if (!(Math.abs(residual[i]!) <= RESIDUAL_LIMIT * terms[i]! + VANISHING)) return false;
     }
     return true;
   }
