@@ -41,7 +41,12 @@ function arrows(top, may) {
 
 module.exports = {
   forbidden: [
-    { name: 'no-cycles', severity: 'error', from: {}, to: { circular: true, viaOnly: { dependencyTypesNot: ['type-only', 'dynamic-import'] } } },
+    {
+      name: 'no-cycles',
+      severity: 'error',
+      from: {},
+      to: { circular: true, viaOnly: { dependencyTypesNot: ['type-only', 'dynamic-import'] } },
+    },
     { name: 'must-resolve', severity: 'error', from: {}, to: { couldNotResolve: true, pathNot: '\\?(worker|url|raw)' } },
     {
       name: 'shared-is-alone',
