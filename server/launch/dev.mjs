@@ -74,6 +74,7 @@ function runApi(env) {
   };
   for (const folder of ['server', 'shared']) watch(join(root, folder), { recursive: true }, again);
   begin();
+  return Promise.race([state.api.ready, state.api.exited]);
 }
 
 async function start() {
