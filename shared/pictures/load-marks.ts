@@ -43,13 +43,15 @@ export function pumpWords(frame: Frame): Shape[] {
   return starts.flatMap((start) => {
     const text = `${start.letters.join(', ')} ${start.words}`;
     const candidates = [9, -23, 26, -40].map((by) => wordsBox(text, start.x, start.y + by));
-    return placeWords(frame, text, candidates, { ink: start.ink });
+    return placeWords(frame, text, candidates, { ink: start.ink, ground: 'sheet' });
   });
 }
 
 /** The whole way of the operating point, thin and dashed; the part travelled is drawn over it by the cursor's layer. */
 export function toCome(frame: Frame): Shape[] {
-  return frame.input.cases.flatMap((entry) => {
+  // From three cases on only the case on the drawing shows what is still to come.
+  const shown = frame.input.cases.length > 2 ? frame.input.cases.filter((entry) => entry.active) : frame.input.cases;
+  return shown.flatMap((entry) => {
     if (!entry.path) return [];
     return clipPolyline(pathPoints(frame, entry.path), frame.plot).map(
       (points): Shape => ({

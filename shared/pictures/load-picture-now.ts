@@ -30,26 +30,51 @@ export function loadNow(path: LoadPath, time: number): LoadNow {
   return { pressure: valueAt(path.times, path.pressure, time), flow: valueAt(path.times, path.flow, time) };
 }
 
-/** Travelled path of every case, and for the case on the drawing the disc with its drop lines.  */
-export function movingShapes(chart: LoadChart, cases: readonly LoadCase[], time: number): Shape[] {
+/** When the phase of a moment began: the last of the given times at or before it, else 0 [s]. */
+export function phaseStart(starts: readonly number[], time: number): number {
+  return starts.reduce((latest, start) => (start <= time + 1e-9 && start > latest ? start : latest), 0);
+}
+
+/** Travelled path of every case: thick since the last command, faint before it, so that a long duty stays readable. Drawn under
+ *  the words.
+ *  @param since when the present phase began [s] */
+export function travelledShapes(chart: LoadChart, cases: readonly LoadCase[], time: number, since = 0): Shape[] {
   const { plot } = chart;
   const shapes: Shape[] = [];
   for (const entry of cases) {
     if (!entry.path) continue;
     const now = loadNow(entry.path, time);
-    const flat = pathPoints(chart, entry.path).subarray(0, 2 * pointsUntil(entry.path, time));
-    const line = [...flat, chart.x(now.pressure), chart.y(now.flow)];
-    for (const piece of clipPolyline(line, plot)) {
-      shapes.push({
-        type: 'polyline',
-        points: piece,
-        stroke: entry.pen.ink,
-        width: entry.active ? 3.6 : 2.6,
-        opacity: entry.stale ? 0.4 : 1,
-        role: 'travelled',
-      });
-    }
+    const flat = pathPoints(chart, entry.path);
+    const from = pointsUntil(entry.path, since);
+    const line = (points: ArrayLike<number>, width: number, opacity: number, role: string) => {
+      for (const piece of clipPolyline(points, plot)) {
+        shapes.push({
+          type: 'polyline',
+          points: piece,
+          stroke: entry.pen.ink,
+          width,
+          opacity: entry.stale ? opacity * 0.4 : opacity,
+          role,
+        });
+      }
+    };
+    if (since > 0) line(flat.subarray(0, 2 * from), 1.4, 0.4, 'before');
+    const begun = loadNow(entry.path, since);
+    const travelled = flat.subarray(2 * from, 2 * pointsUntil(entry.path, time));
+    line(
+      [chart.x(begun.pressure), chart.y(begun.flow), ...travelled, chart.x(now.pressure), chart.y(now.flow)],
+      entry.active ? 3.6 : 2.6,
+      1,
+      'travelled',
+    );
   }
+  return shapes;
+}
+
+/** Where every case is now; for the case on the drawing the disc with its drop lines. Drawn over the words. */
+export function nowShapes(chart: LoadChart, cases: readonly LoadCase[], time: number): Shape[] {
+  const { plot } = chart;
+  const shapes: Shape[] = [];
   for (const entry of cases) {
     if (!entry.path) continue;
     const now = loadNow(entry.path, time);

@@ -5,7 +5,7 @@ import { clipPolygon, clipPolyline } from './clip.ts';
 import { chartEnds, type LoadCase, type LoadPictureInput } from './load-chart.ts';
 import { bandAt, flowAt, loadPath, thinPath } from './load-path.ts';
 import { loadPicture } from './load-picture.ts';
-import { loadNow, loadWords, movingShapes, pointsUntil } from './load-picture-now.ts';
+import { loadNow, loadWords, nowShapes, phaseStart, pointsUntil, travelledShapes } from './load-picture-now.ts';
 import { overlaps, textWidth } from './placement.ts';
 import { syntheticRun } from './run-for-tests.ts';
 import type { Shape } from './shape.ts';
@@ -236,8 +236,8 @@ describe('what moves', () => {
   const entry = loadCase(1);
   it('travels up to the cursor and marks the point now', () => {
     const chart = picture();
-    const shapes = movingShapes(chart, [entry], 3.5);
-    const now = shapes.find((shape) => 'role' in shape && shape.role === 'now');
+    const shapes = travelledShapes(chart, [entry], 3.5);
+    const now = nowShapes(chart, [entry], 3.5).find((shape) => 'role' in shape && shape.role === 'now');
     expect(now?.type === 'circle' && now.x).toBeCloseTo(chart.x(87.5e5), 3);
     const travelled = shapes.find((shape) => 'role' in shape && shape.role === 'travelled');
     expect(travelled?.type === 'polyline' && Math.max(...[...travelled.points].filter((_, i) => i % 2 === 0))).toBeCloseTo(
@@ -248,6 +248,17 @@ describe('what moves', () => {
     expect(pointsUntil(entry.path, -1)).toBe(0);
     expect(pointsUntil(entry.path, 99)).toBe(entry.path.times.length);
     expect(loadNow(entry.path, 99).pressure).toBeCloseTo(175e5, 3);
+  });
+  it('is thick since the last command and faint before it', () => {
+    expect(phaseStart([0, 2, 5], 4)).toBe(2);
+    expect(phaseStart([], 4)).toBe(0);
+    const chart = picture();
+    const shapes = travelledShapes(chart, [entry], 3.5, 2);
+    const xs = (role: string) =>
+      shapes.flatMap((shape) => (shape.type === 'polyline' && shape.role === role ? [...shape.points].filter((_, i) => i % 2 === 0) : []));
+    expect(Math.min(...xs('travelled'))).toBeCloseTo(chart.x(50e5), 3);
+    expect(Math.max(...xs('travelled'))).toBeCloseTo(chart.x(87.5e5), 3);
+    expect(Math.max(...xs('before'), 0)).toBeLessThanOrEqual(chart.x(50e5) + 1e-6);
   });
   it('is told in words', () => {
     const words = loadWords([loadCase(0, { stall: { pressure: 150e5, flow: 6.4e-4 } }), entry], 3.5, { system: 'si' });

@@ -10,7 +10,7 @@ export function loadPicture(input: LoadPictureInput): LoadChart {
   const frame = loadFrame(input);
   const { plot } = frame;
   // Marks take their places first, then words by their weight.
-  const above: Shape[] = [...stallMarks(frame), ...numeralMarks(frame)];
+  const marks = [...stallMarks(frame), ...numeralMarks(frame)];
   const words = [...limitNames(frame), ...bandNames(frame), ...pumpWords(frame)];
   const below: Shape[] = [
     { type: 'rect', x: plot.x, y: plot.y, w: plot.w, h: plot.h, fill: 'sheet', role: 'ground' },
@@ -19,8 +19,8 @@ export function loadPicture(input: LoadPictureInput): LoadChart {
     ...limitLines(frame),
     ...pumpLines(frame),
     ...toCome(frame),
-    ...words,
   ];
+  const above = [...words, ...marks];
   const picture = { width: input.width, height: input.height, title: input.title, shapes: [...below, ...above] };
   return { picture, below, above, plot, x: frame.x, y: frame.y };
 }

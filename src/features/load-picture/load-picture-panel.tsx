@@ -1,7 +1,8 @@
 import { useEffect, useMemo, useRef, useState } from 'react';
 import type { LoadNumeral } from '#shared/pictures/load-chart.ts';
 import { loadPicture } from '#shared/pictures/load-picture.ts';
-import { loadWords, movingShapes } from '#shared/pictures/load-picture-now.ts';
+import { loadWords, nowShapes, phaseStart, travelledShapes } from '#shared/pictures/load-picture-now.ts';
+import type { Shape } from '#shared/pictures/shape.ts';
 import { shapesMarkup } from '#shared/pictures/svg.ts';
 import { textureDefinition } from '#shared/pictures/textures.ts';
 import { inkCss } from '#src/components/schematic/ink-css.ts';
@@ -9,6 +10,7 @@ import { ShapeView, setMarkup } from '#src/components/schematic/shape-view.tsx';
 import { useFormat } from '#src/components/use-format.ts';
 import { useSize } from '#src/lib/use-size.ts';
 import { useCursor } from '#src/stores/cursor-store.ts';
+import { useDocument } from '#src/stores/document-store.ts';
 import { useRuns } from '#src/stores/run-store.ts';
 import { LoadSave } from './load-save.tsx';
 import { useLoadCases } from './use-load-cases.ts';
@@ -50,15 +52,22 @@ export function LoadPicturePanel({ findings = [] }: LoadPicturePanelProps) {
     () => loadPicture({ title: 'Load picture', cases, numerals, preferences, width: size.width, height: size.height }),
     [cases, numerals, preferences, size],
   );
-  const moving = useRef<SVGGElement>(null);
+  const commands = useDocument((state) => state.document.duty.commands);
+  const starts = useMemo(() => commands.map((command) => command.time), [commands]);
+  const travelled = useRef<SVGGElement>(null);
+  const now = useRef<SVGGElement>(null);
   useEffect(() => {
     const draw = () => {
-      if (moving.current)
-        setMarkup(moving.current, shapesMarkup(movingShapes(chart, cases, useCursor.getState().time), { colour: inkCss }));
+      const { time } = useCursor.getState();
+      const write = (group: SVGGElement | null, shapes: readonly Shape[]) => {
+        if (group) setMarkup(group, shapesMarkup(shapes, { colour: inkCss }));
+      };
+      write(travelled.current, travelledShapes(chart, cases, time, phaseStart(starts, time)));
+      write(now.current, nowShapes(chart, cases, time));
     };
     draw();
     return useCursor.subscribe((state, before) => state.time !== before.time && draw());
-  }, [chart, cases]);
+  }, [chart, cases, starts]);
   const settled = useRuns((state) => Object.values(state.byCase).some((entry) => entry.state === 'done' || entry.state === 'refused'));
   const words = useWords(cases, preferences);
   const ready = size.width > 0 && size.height > 0;
@@ -69,15 +78,16 @@ export function LoadPicturePanel({ findings = [] }: LoadPicturePanelProps) {
         <h2 className="region-heading">Load picture</h2>
         <span className="load-sub">P–Q chart</span>
         {hasMotor && <span className="load-note">Over and Trips only if it lasts</span>}
-        <LoadSave cases={cases} numerals={numerals} />
+        <LoadSave cases={cases} numerals={numerals} starts={starts} />
       </div>
       <div ref={ref} className="load-plot">
         {ready && cases.length > 0 && (
           <svg width={size.width} height={size.height} viewBox={`0 0 ${size.width} ${size.height}`} aria-hidden="true">
             <Textures />
             <ShapeView shapes={chart.below} />
-            <g ref={moving} />
+            <g ref={travelled} />
             <ShapeView shapes={chart.above} />
+            <g ref={now} />
           </svg>
         )}
         {cases.length === 0 && settled && <p className="load-empty">The load picture needs a run with a pump.</p>}

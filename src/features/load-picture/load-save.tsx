@@ -9,10 +9,12 @@ import { EXPORT_HEIGHT, EXPORT_WIDTH, loadPictureSvg } from './load-export.ts';
 export interface LoadSaveProps {
   readonly cases: readonly LoadCase[];
   readonly numerals: readonly LoadNumeral[];
+  /** Times of commands [s]. */
+  readonly starts: readonly number[];
 }
 
 /** Saves the load picture as SVG or PNG. */
-export function LoadSave({ cases, numerals }: LoadSaveProps) {
+export function LoadSave({ cases, numerals, starts }: LoadSaveProps) {
   const { preferences } = useFormat();
   const [open, setOpen] = useState(false);
   const [fault, setFault] = useState<string | null>(null);
@@ -23,7 +25,7 @@ export function LoadSave({ cases, numerals }: LoadSaveProps) {
     window.addEventListener('pointerdown', away);
     return () => window.removeEventListener('pointerdown', away);
   }, [open]);
-  const svg = () => loadPictureSvg(title(), cases, numerals, preferences, useCursor.getState().time);
+  const svg = () => loadPictureSvg(title(), cases, numerals, preferences, useCursor.getState().time, starts);
   const name = (ending: string) => fileName(`${useDocument.getState().document.title} load picture`, ending);
   async function savePng() {
     try {
