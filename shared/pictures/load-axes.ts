@@ -20,7 +20,7 @@ export function loadAxes(frame: Frame): Shape[] {
     const at = x(tick * pressure.factor);
     if (tick > 0) shapes.push({ type: 'line', x1: at, y1: plot.y, x2: at, y2: base, stroke: 'rule', width: 1, opacity: 0.8 });
     // The unit stands at the axis' end: a number that would touch it is left out.
-    if (at > plot.x + plot.w - 30) continue;
+    if (at > plot.x + plot.w - 44) continue;
     shapes.push({
       type: 'text',
       x: at,

@@ -121,7 +121,14 @@ export function bandNames(frame: Frame): Shape[] {
   const corner = wordsBox('Motor stalls', right - textWidth('Motor stalls', SMALL, 640) - 6, plot.y + 3);
   const outer = curves.trips.pressure.length > 0 ? curves.trips : curves.pullOut;
   return [
-    ...put('Motor stalls', [corner, { ...corner, y: corner.y + 18 }, { ...corner, x: corner.x - 40 }], 'tint-motor-stalls'),
+    // Named only where the region itself is in view.
+    ...put(
+      'Motor stalls',
+      [corner, { ...corner, y: corner.y + 18 }, { ...corner, x: corner.x - 40 }].filter(
+        (box) => heightAt(curves.pullOut, box.x + 0.4 * box.w) > box.y + box.h,
+      ),
+      'tint-motor-stalls',
+    ),
     ...(curves.trips.pressure.length > 0 ? put('Trips', inside('Trips', curves.pullOut, curves.trips), 'tint-trips') : []),
     ...put('Over', inside('Over', outer, curves.rated), 'tint-over'),
     ...put(

@@ -220,6 +220,12 @@ describe('load picture', () => {
       }
     }
   });
+  it('does not name a band that lies outside the chart', () => {
+    const far = { ...curves, pullOut: curve(60_000) };
+    const said = texts(picture({ cases: [loadCase(1, { curves: far })], numerals: [] }).picture.shapes).map((shape) => shape.text);
+    expect(said).not.toContain('Motor stalls');
+    expect(said).toContain('Trips');
+  });
   it('joins the letters of pump lines that are the same', () => {
     const said = texts(picture({ cases: [loadCase(0), loadCase(2)] }).picture.shapes).map((shape) => shape.text);
     expect(said).toContain('A, C stop fully out, 28.0 cm³/rev');
