@@ -22,9 +22,9 @@ export function effectiveDocument(document: CircuitDocument, caseId: string): Ci
 
 function withFields<T extends object>(section: T, changes: readonly CaseChange[]): T {
   if (changes.length === 0) return section;
-  const result: Record<string, unknown> = { ...section };
+  const result = { ...section } as unknown as Record<string, unknown>;
   for (const { field, value } of changes) if (field in section && typeof result[field] === typeof value) result[field] = value;
-  return result as T;
+  return result as unknown as T;
 }
 
 function changedComponent(component: Component, changes: readonly CaseChange[]): Component {
