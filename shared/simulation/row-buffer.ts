@@ -6,6 +6,9 @@ const ROWS_AT_MOST = 5000;
 /** Numbers held before rows are thinned in between. */
 const NUMBERS_HELD = 4_000_000;
 
+/** Numbers of memory kept between runs. */
+const SPARE_AT_MOST = 2_000_000;
+
 /** Memory of a finished run, kept for the next one: fetching fresh pages costs as much as filling them. */
 let spare: Float64Array | null = null;
 
@@ -26,6 +29,8 @@ export class RowBuffer {
     const needed = ROWS_AT_MOST * columns;
     this.data = spare !== null && spare.length >= needed ? spare : new Float64Array(needed);
     spare = null;
+    // Column 0 stands for what is always zero and is never written.
+    this.data.fill(0, 0, ROWS_AT_MOST);
   }
 
   /** Appends a row and returns its number; its place in every column is still to be written. */
@@ -77,7 +82,7 @@ export class RowBuffer {
   split(): Float64Array[] {
     const { data, rows, columns, capacity } = this;
     const split = Array.from({ length: columns }, (_, c) => data.slice(c * capacity, c * capacity + rows));
-    spare = data;
+    if (data.length <= SPARE_AT_MOST) spare = data;
     this.data = new Float64Array(0);
     return split;
   }
