@@ -22,7 +22,10 @@ export function SheetDialog({ title, onClose, children, foot }: SheetDialogProps
               <Icon name="close" />
             </button>
           </div>
-          <div className="dialog-body">{children}</div>
+          {/* biome-ignore lint/a11y/noNoninteractiveTabindex: it scrolls, and must scroll by keys too */}
+          <div className="dialog-body" tabIndex={0}>
+            {children}
+          </div>
           {foot && <div className="dialog-foot">{foot}</div>}
         </Dialog>
       </Modal>

@@ -6,6 +6,7 @@ import type { CircuitDocument } from '#shared/circuit/schema.ts';
 import { schematicPicture } from '#shared/pictures/schematic.ts';
 import { pictureToSvg } from '#shared/pictures/svg.ts';
 import { CautionLine } from '#src/components/caution-line.tsx';
+import { useLayout } from '#src/lib/layout.ts';
 import { useTheme } from '#src/lib/theme.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { useKeeping } from '#src/stores/keeping-store.ts';
@@ -17,6 +18,7 @@ const demoAbout = 'Three weeks after a new pump was fitted the motor stalls on t
 /** A new circuit: an empty sheet, a starter, or the worked demo. The circuit in hand can be had back by undo. */
 export function StartRoute() {
   const navigate = useNavigate();
+  const layout = useLayout();
 
   function take(document: CircuitDocument, path: string) {
     useDocument.getState().edit(() => document);
@@ -66,7 +68,7 @@ export function StartRoute() {
         </button>
       </main>
       <footer className="draw-caution">
-        <CautionLine />
+        <CautionLine form={layout === 'desk' ? 'whole' : 'half'} />
       </footer>
     </div>
   );

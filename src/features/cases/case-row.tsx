@@ -1,3 +1,4 @@
+import { useEffect, useRef } from 'react';
 import { addCase, caseLetter } from '#shared/circuit/edit/cases.ts';
 import { Icon } from '#src/components/icons.tsx';
 import { takeCase } from '#src/stores/apply-value.ts';
@@ -15,8 +16,14 @@ export function CaseRow({ form }: CaseRowProps) {
   const overlays = useDocument((state) => state.overlays);
   const active = cases.find((entry) => entry.id === activeCase);
   const full = cases.length >= 10;
+  const row = useRef<HTMLElement>(null);
+  // biome-ignore lint/correctness/useExhaustiveDependencies: another case on the drawing is brought into view
+  useEffect(() => {
+    const card = row.current?.querySelector<HTMLElement>('[data-active]');
+    if (row.current && card && row.current.scrollWidth > row.current.clientWidth) row.current.scrollLeft = card.offsetLeft - 84;
+  }, [activeCase]);
   return (
-    <nav className={`case-row case-row-${form}`} aria-label="Cases" data-many={cases.length >= 4 || undefined}>
+    <nav ref={row} className={`case-row case-row-${form}`} aria-label="Cases" data-many={cases.length >= 4 || undefined}>
       {cases.map((entry) => (
         <CaseCard
           key={entry.id}
