@@ -12,7 +12,7 @@ import {
 import { setTagPlace } from '#shared/circuit/edit/sheet.ts';
 import type { TagPlace } from '#shared/pictures/tag-slots.ts';
 import { useFormat } from '#src/components/use-format.ts';
-import { type Layout, useLayout, useTouch } from '#src/lib/layout.ts';
+import { useLayout, useTouch } from '#src/lib/layout.ts';
 import { useSize } from '#src/lib/use-size.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { openNameplate } from '#src/stores/nameplate-store.ts';
@@ -23,7 +23,7 @@ import { LineReading } from './line-reading.tsx';
 import { steadyNodes } from './steady.ts';
 import { TurnWheel, WHEEL_HEIGHT, WHEEL_WIDTH } from './turn-wheel.tsx';
 import { type BenchLayout, useBenchLayout } from './use-bench-layout.ts';
-import { ZoomButtons } from './zoom-buttons.tsx';
+import { LEAST_ZOOM, MOST_ZOOM, ZoomButtons } from './zoom-buttons.tsx';
 import './bench.css';
 
 export interface BenchDrawingProps {
@@ -58,15 +58,31 @@ function Drawing({ onOpen }: Required<BenchDrawingProps>) {
     inHand,
     key: phone ? null : { width: KEY_WIDTH + 26, height: KEY_HEIGHT + 14 },
     wheel: wheelBeside ? { width: WHEEL_WIDTH + 24, height: WHEEL_HEIGHT + 20 } : null,
-    buttons: buttonRoom(layout, touch),
+    buttons: phone ? noRoom : buttonRoom(touch),
   });
   const wheelBelow = inHand !== null && (phone || (wheelBeside && bench.wheelCorner === null));
   const tag = bench.tags.find((entry) => entry.spec.address === inHand);
+  const buttons = <ZoomButtons zoom={zoom} touch={touch} width={size.width} height={size.height} onZoom={setZoom} />;
   return (
     <div className="bench-drawing" data-layout={layout} data-below={wheelBelow || undefined}>
-      {phone && <LineReading />}
+      {phone && (
+        <div className="phone-strip">
+          <LineReading />
+          {buttons}
+        </div>
+      )}
       <div ref={ref} className="bench-flow">
-        <Flow bench={bench} width={size.width} height={size.height} zoom={zoom} touch={touch} onZoom={setZoom} onOpen={onOpen} />
+        <Flow
+          bench={bench}
+          width={size.width}
+          height={size.height}
+          zoom={zoom}
+          touch={touch}
+          besideWheel={wheelBeside}
+          onZoom={setZoom}
+          onOpen={onOpen}
+        />
+        {!phone && buttons}
         {!phone && (
           <div className={`bench-panel bench-panel-${bench.keyCorner ?? 'top-left'}`}>
             <InkKey />
@@ -82,13 +98,15 @@ function Drawing({ onOpen }: Required<BenchDrawingProps>) {
         )}
       </div>
       {tag && wheelBelow && <TurnWheel spec={tag.spec} state={tag.state} wide />}
-      {phone ? <FlowList tags={bench.tags} onOpen={onOpen} /> : <SpokenList />}
+      {phone ? <FlowList tags={bench.tags} folded={wheelBelow} onOpen={onOpen} /> : <SpokenList />}
     </div>
   );
 }
 
-function buttonRoom(layout: Layout, touch: boolean): { width: number; height: number } {
-  return touch || layout === 'phone' ? { width: 196, height: 66 } : { width: 142, height: 48 };
+const noRoom = { width: 0, height: 0 };
+
+function buttonRoom(touch: boolean): { width: number; height: number } {
+  return touch ? { width: 196, height: 66 } : { width: 142, height: 48 };
 }
 
 interface FlowProps {
@@ -97,11 +115,13 @@ interface FlowProps {
   readonly height: number;
   readonly zoom: number | null;
   readonly touch: boolean;
+  /** The turn wheel has the buttons of the tag in hand. */
+  readonly besideWheel: boolean;
   readonly onZoom: (zoom: number | null) => void;
   readonly onOpen: (id: string) => void;
 }
 
-function Flow({ bench, width, height, zoom, touch, onZoom, onOpen }: FlowProps) {
+function Flow({ bench, width, height, zoom, touch, besideWheel, onZoom, onOpen }: FlowProps) {
   const document = useDocument((state) => state.document);
   const activeCase = useDocument((state) => state.activeCase);
   const inHand = useDocument((state) => state.inHand);
@@ -170,7 +190,8 @@ function Flow({ bench, width, height, zoom, touch, onZoom, onOpen }: FlowProps) 
           eyelet: place.eyelet,
           ink,
           inHand: inHand === spec.address,
-          touch,
+          touch: touch || besideWheel,
+          toolsAbove: zoom === null && (place.box.y + place.box.h - fit.top) * 10 * fit.zoom + 36 > height,
           onOpen: open,
           grow,
           chipText: format.quantity(state.value, spec.quantity).value,
@@ -180,7 +201,7 @@ function Flow({ bench, width, height, zoom, touch, onZoom, onOpen }: FlowProps) 
     const steady = steadyNodes(formerNodes.current, next);
     formerNodes.current = new Map(steady.map((node) => [node.id, node]));
     return steady;
-  }, [document, activeCase, routes, small, grow, readings, tags, inHand, ink, touch, open, format, moving]);
+  }, [document, activeCase, routes, small, grow, readings, tags, inHand, ink, touch, besideWheel, zoom, fit, height, open, format, moving]);
 
   function follow(changes: NodeChange[]) {
     for (const change of changes) {
@@ -202,45 +223,33 @@ function Flow({ bench, width, height, zoom, touch, onZoom, onOpen }: FlowProps) 
   function moved(event: MouseEvent | TouchEvent | null, viewport: Viewport) {
     if (event) onZoom(viewport.zoom);
   }
-  function zoomBy(factor: number) {
-    const { x, y, zoom: now } = flow.getViewport();
-    const next = Math.min(3, Math.max(0.15, now * factor));
-    const cx = width / 2;
-    const cy = height / 2;
-    flow.setViewport({ zoom: next, x: cx - ((cx - x) * next) / now, y: cy - ((cy - y) * next) / now });
-    onZoom(next);
-  }
-
   return (
-    <>
-      <ReactFlow
-        nodes={nodes}
-        edges={noEdges}
-        nodeTypes={benchNodeTypes}
-        onNodesChange={follow}
-        onNodeDragStop={drop}
-        onMoveEnd={moved}
-        onPaneClick={() => useDocument.getState().takeInHand(null)}
-        minZoom={0.15}
-        maxZoom={3}
-        nodesConnectable={false}
-        nodesFocusable={false}
-        edgesFocusable={false}
-        elementsSelectable={false}
-        selectNodesOnDrag={false}
-        zoomOnDoubleClick={false}
-        deleteKeyCode={null}
-        selectionKeyCode={null}
-        multiSelectionKeyCode={null}
-        panActivationKeyCode={null}
-        disableKeyboardA11y
-        proOptions={hideCredit}
-        aria-label="The circuit"
-      >
-        <Background variant={BackgroundVariant.Dots} gap={50} size={2.2} offset={1} />
-      </ReactFlow>
-      <ZoomButtons fitted={zoom === null} onZoom={zoomBy} onFit={() => onZoom(null)} touch={touch} />
-    </>
+    <ReactFlow
+      nodes={nodes}
+      edges={noEdges}
+      nodeTypes={benchNodeTypes}
+      onNodesChange={follow}
+      onNodeDragStop={drop}
+      onMoveEnd={moved}
+      onPaneClick={() => useDocument.getState().takeInHand(null)}
+      minZoom={LEAST_ZOOM}
+      maxZoom={MOST_ZOOM}
+      nodesConnectable={false}
+      nodesFocusable={false}
+      edgesFocusable={false}
+      elementsSelectable={false}
+      selectNodesOnDrag={false}
+      zoomOnDoubleClick={false}
+      deleteKeyCode={null}
+      selectionKeyCode={null}
+      multiSelectionKeyCode={null}
+      panActivationKeyCode={null}
+      disableKeyboardA11y
+      proOptions={hideCredit}
+      aria-label="The circuit"
+    >
+      <Background variant={BackgroundVariant.Dots} gap={50} size={2.2} offset={1} />
+    </ReactFlow>
   );
 }
 

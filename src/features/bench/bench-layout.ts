@@ -68,9 +68,6 @@ function shaftBoxes(points: readonly Point[]): readonly Box[] {
   return boxes;
 }
 
-/** Row of buttons under the tag in hand [px]. */
-export const TOOLS = 34;
-
 /** Pixels of the three forms. A chip is small, but takes presses from around it. */
 export function tagSizes(touch: boolean, chipText: string): Record<TagForm, { readonly width: number; readonly height: number }> {
   return {
@@ -155,11 +152,7 @@ export function seatTags(
   const { grow, touch, frame, blocked, wheel } = options;
   const requests = wishes.map(({ spec, form, chipText, inHand }): TagRequest => {
     const pixels = tagSizes(touch, chipText);
-    const tools = inHand && !wheel ? TOOLS : 0;
-    const size = (name: TagForm) => ({
-      w: (pixels[name].width / 10) * grow,
-      h: ((pixels[name].height + (name === 'full' ? tools : 0)) / 10) * grow,
-    });
+    const size = (name: TagForm) => ({ w: (pixels[name].width / 10) * grow, h: (pixels[name].height / 10) * grow });
     const dragged = document.tagPlaces[spec.address];
     return {
       address: spec.address,

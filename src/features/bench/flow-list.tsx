@@ -13,15 +13,18 @@ import type { BenchLayout } from './use-bench-layout.ts';
 
 export interface FlowListProps {
   readonly tags: BenchLayout['tags'];
+  /** Only its head is shown while the turn wheel has the room; pressing it lays the screw down. */
+  readonly folded: boolean;
   readonly onOpen: (id: string) => void;
 }
 
 /** All parts in flow order with live readings; pressing a row takes its screw in hand. */
-export function FlowList({ tags, onOpen }: FlowListProps) {
+export function FlowList({ tags, folded, onOpen }: FlowListProps) {
   const document = useDocument((state) => state.document);
   const inHand = useDocument((state) => state.inHand);
   const format = useFormat();
-  const [open, setOpen] = useState(true);
+  const [wanted, setOpen] = useState(true);
+  const open = wanted && !folded;
   const when = useRef<HTMLSpanElement>(null);
   const rows = useMemo(() => flowRows(document), [document]);
   useMoment(({ time }) => {
@@ -29,7 +32,15 @@ export function FlowList({ tags, onOpen }: FlowListProps) {
   });
   return (
     <div className="flow-list" data-open={open || undefined}>
-      <button type="button" className="flow-list-head" aria-expanded={open} onClick={() => setOpen(!open)}>
+      <button
+        type="button"
+        className="flow-list-head"
+        aria-expanded={open}
+        onClick={() => {
+          if (folded) useDocument.getState().takeInHand(null);
+          setOpen(!open);
+        }}
+      >
         <span>
           {rows.length} {rows.length === 1 ? 'part' : 'parts'} in flow order, at <span ref={when} />
         </span>

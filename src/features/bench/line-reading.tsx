@@ -17,7 +17,7 @@ export function LineReading() {
     const pressure = address ? at(address) : undefined;
     const shown = pressure === undefined ? null : format.quantity(pressure, 'pressure');
     if (value.current) value.current.textContent = shown?.value ?? '';
-    if (unit.current) unit.current.textContent = shown ? `${shown.unit} on the pump line` : '';
+    if (unit.current) unit.current.textContent = shown ? `${shown.unit}, pump line` : '';
   });
   return (
     <p className="line-reading">

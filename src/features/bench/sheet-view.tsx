@@ -1,4 +1,4 @@
-import { memo, useMemo, useRef } from 'react';
+import { memo, useEffect, useMemo, useRef } from 'react';
 import type { CircuitDocument } from '#shared/circuit/schema.ts';
 import { FILLET } from '#shared/pictures/pressure-ink.ts';
 import type { RoutedLine } from '#shared/pictures/route.ts';
@@ -27,30 +27,10 @@ const LONG_PRESS = 550;
 export const SheetView = memo(function SheetView({ document, caseId, routes, textScale, onOpen }: SheetViewProps) {
   const joined = useJoinedPorts(document);
   const values = useSteadyValues(document, caseId);
-  const press = useRef<ReturnType<typeof setTimeout> | undefined>(undefined);
-  const hold = (event: { pointerType: string; target: EventTarget }) => {
-    if (event.pointerType === 'mouse') return;
-    const id = openedBy(event.target);
-    clearTimeout(press.current);
-    if (id) press.current = setTimeout(() => onOpen(id), LONG_PRESS);
-  };
-  const release = () => clearTimeout(press.current);
+  const group = useOpening(onOpen);
   return (
     <svg className="bench-sheet" width="1" height="1" overflow="visible" aria-hidden="true">
-      <g
-        role="presentation"
-        transform="scale(10)"
-        onDoubleClick={(event) => {
-          const id = openedBy(event.target);
-          if (id) onOpen(id);
-        }}
-        onPointerDown={hold}
-        onPointerUp={release}
-        onPointerCancel={release}
-        onPointerMove={(event) => {
-          if (Math.abs(event.movementX) + Math.abs(event.movementY) > 3) release();
-        }}
-      >
+      <g ref={group} transform="scale(10)">
         <ShaftsView components={document.components} shafts={document.shafts} />
         {document.lines.map((line) => {
           const route = routes.get(line.id);
@@ -71,8 +51,45 @@ export const SheetView = memo(function SheetView({ document, caseId, routes, tex
   );
 });
 
+/** Double click or long press on a symbol or line. The keyboard opens the same from the tags and the component list. */
+function useOpening(onOpen: (id: string) => void) {
+  const group = useRef<SVGGElement>(null);
+  useEffect(() => {
+    const element = group.current;
+    if (!element) return;
+    let press: ReturnType<typeof setTimeout> | undefined;
+    const release = () => clearTimeout(press);
+    const open = (event: Event) => {
+      const id = openedBy(event.target);
+      if (id) onOpen(id);
+    };
+    const hold = (event: PointerEvent) => {
+      release();
+      const id = openedBy(event.target);
+      if (id && event.pointerType !== 'mouse') press = setTimeout(() => onOpen(id), LONG_PRESS);
+    };
+    const stray = (event: PointerEvent) => {
+      if (Math.abs(event.movementX) + Math.abs(event.movementY) > 3) release();
+    };
+    element.addEventListener('dblclick', open);
+    element.addEventListener('pointerdown', hold);
+    element.addEventListener('pointerup', release);
+    element.addEventListener('pointercancel', release);
+    element.addEventListener('pointermove', stray);
+    return () => {
+      release();
+      element.removeEventListener('dblclick', open);
+      element.removeEventListener('pointerdown', hold);
+      element.removeEventListener('pointerup', release);
+      element.removeEventListener('pointercancel', release);
+      element.removeEventListener('pointermove', stray);
+    };
+  }, [onOpen]);
+  return group;
+}
+
 /** Id of the component or line under the pointer. */
-function openedBy(target: EventTarget): string | null {
+function openedBy(target: EventTarget | null): string | null {
   return target instanceof Element ? (target.closest('[data-open]')?.getAttribute('data-open') ?? null) : null;
 }
 

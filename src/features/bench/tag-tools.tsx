@@ -9,11 +9,12 @@ export interface TagToolsProps {
   readonly spec: TagSpec;
   readonly state: TagState;
   readonly pinned: boolean;
+  readonly above: boolean;
   readonly onRefused: (refusal: TurnRefusal | null) => void;
 }
 
 /** Buttons of the tag in hand: a quarter turn either way, the lock nut, back to as found, pin. */
-export function TagTools({ spec, state, pinned, onRefused }: TagToolsProps) {
+export function TagTools({ spec, state, pinned, above, onRefused }: TagToolsProps) {
   const { document } = useDocument.getState();
   const dragged = spec.address in document.tagPlaces;
   function pin() {
@@ -24,7 +25,7 @@ export function TagTools({ spec, state, pinned, onRefused }: TagToolsProps) {
     useDocument.getState().edit((current) => setTagPlace(current, spec.address, pinned ? null : { dx: at.dx, dy: at.dy, pinned: true }));
   }
   return (
-    <div className="tag-tools nodrag">
+    <div className={`tag-tools nodrag${above ? ' tag-tools-above' : ''}`}>
       <button type="button" aria-label="A quarter turn out" onClick={() => onRefused(turnBy(spec, -QUARTER))}>
         −¼
       </button>

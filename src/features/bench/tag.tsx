@@ -23,6 +23,8 @@ export interface TagProps {
   readonly ink: number;
   readonly inHand: boolean;
   readonly touch: boolean;
+  /** The buttons stand above the tag: below it there is no room. */
+  readonly toolsAbove: boolean;
   /** Double click, long press or Enter. */
   readonly onOpen: (componentId: string) => void;
 }
@@ -30,7 +32,7 @@ export interface TagProps {
 const RULER = 148;
 
 /** A screw tag on the drawing: full, compact, or the value alone. */
-export const Tag = memo(function Tag({ spec, state, form, eyelet, ink, inHand, touch, onOpen }: TagProps) {
+export const Tag = memo(function Tag({ spec, state, form, eyelet, ink, inHand, touch, toolsAbove, onOpen }: TagProps) {
   const format = useFormat();
   const [refusal, setRefusal] = useState<TurnRefusal | null>(null);
   const [typing, setTyping] = useState<string | null>(null);
@@ -132,7 +134,9 @@ export const Tag = memo(function Tag({ spec, state, form, eyelet, ink, inHand, t
         </div>
       )}
       {form === 'full' && <span className="tag-eyelet" aria-hidden="true" />}
-      {inHand && form === 'full' && !touch && <TagTools spec={spec} state={state} pinned={pinned} onRefused={setRefusal} />}
+      {inHand && form === 'full' && !touch && (
+        <TagTools spec={spec} state={state} pinned={pinned} above={toolsAbove} onRefused={setRefusal} />
+      )}
       {refusal && <TagRefusal spec={spec} refusal={refusal} onDone={() => setRefusal(null)} />}
     </fieldset>
   );

@@ -58,6 +58,7 @@ export function useTurnWheel<E extends HTMLElement>(spec: TagSpec, onRefused: (r
     const finish = () => {
       rest = undefined;
       gathered = 0;
+      window.removeEventListener('wheel', turn, { capture: true });
       useDocument.getState().endGesture();
     };
     const turn = (event: WheelEvent) => {
@@ -75,6 +76,8 @@ export function useTurnWheel<E extends HTMLElement>(spec: TagSpec, onRefused: (r
       if (rest === undefined) {
         useDocument.getState().takeInHand(turned.address);
         useDocument.getState().beginGesture();
+        // Until the run of notches ends they all turn this screw, even where the tag has moved from under the pointer.
+        window.addEventListener('wheel', turn, { capture: true, passive: false });
       }
       clearTimeout(rest);
       rest = setTimeout(finish, 350);

@@ -1,21 +1,38 @@
+import { useReactFlow } from 'reactflow';
+
 export interface ZoomButtonsProps {
-  readonly fitted: boolean;
+  /** null = everything is fitted in. */
+  readonly zoom: number | null;
   readonly touch: boolean;
-  readonly onZoom: (factor: number) => void;
-  readonly onFit: () => void;
+  /** Of the drawing [px]. */
+  readonly width: number;
+  readonly height: number;
+  readonly onZoom: (zoom: number | null) => void;
 }
 
+export const LEAST_ZOOM = 0.15;
+export const MOST_ZOOM = 3;
+
 /** Every two-finger gesture has its button. */
-export function ZoomButtons({ fitted, touch, onZoom, onFit }: ZoomButtonsProps) {
+export function ZoomButtons({ zoom, touch, width, height, onZoom }: ZoomButtonsProps) {
+  const flow = useReactFlow();
+  function zoomBy(factor: number) {
+    const { x, y, zoom: now } = flow.getViewport();
+    const next = Math.min(MOST_ZOOM, Math.max(LEAST_ZOOM, now * factor));
+    const cx = width / 2;
+    const cy = height / 2;
+    flow.setViewport({ zoom: next, x: cx - ((cx - x) * next) / now, y: cy - ((cy - y) * next) / now });
+    onZoom(next);
+  }
   return (
     <div className={`zoom-buttons${touch ? ' zoom-buttons-touch' : ''}`} role="toolbar" aria-label="View">
-      <button type="button" className="button" aria-label="Smaller" onClick={() => onZoom(0.8)}>
+      <button type="button" className="button" aria-label="Smaller" onClick={() => zoomBy(0.8)}>
         −
       </button>
-      <button type="button" className="button" aria-pressed={fitted} onClick={onFit}>
+      <button type="button" className="button" aria-pressed={zoom === null} onClick={() => onZoom(null)}>
         Fit
       </button>
-      <button type="button" className="button" aria-label="Larger" onClick={() => onZoom(1.25)}>
+      <button type="button" className="button" aria-label="Larger" onClick={() => zoomBy(1.25)}>
         +
       </button>
     </div>
