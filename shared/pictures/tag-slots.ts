@@ -175,9 +175,27 @@ function beforeAnchor({ from, to }: StringLine): Point {
   return { x: from.x + (to.x - from.x) * 0.92, y: from.y + (to.y - from.y) * 0.92 };
 }
 
+/** Where the hand is: a tag that is taken in hand stays under it, pushed into the frame at most, and lies above what it covers.
+ *  One that opens from a smaller form does so only where it covers no symbol and no other tag. */
+function underTheHand(request: TagRequest, sheet: Sheet, others: readonly TagPlace[]): TagPlace | null {
+  const { before, form } = request;
+  if (!before || before.dragged) return null;
+  const size = request.sizes[form];
+  const y = before.form === form ? before.box.y : before.box.y - (sheet.grow ?? 1);
+  const box = {
+    x: held(before.box.x, sheet.frame?.x, sheet.frame?.w, size.w),
+    y: held(y, sheet.frame?.y, sheet.frame?.h, size.h),
+    ...size,
+  };
+  const covers = (other: Box) => overlaps(box, other, ROOM);
+  if (before.form !== form && (sheet.symbols.some(covers) || others.some((other) => covers(other.box)))) return null;
+  return placeOf(request, form, box, true, false);
+}
+
 /** The place it had before, while that is still free; null when it is taken or the form changed. */
 function sameAgain(request: TagRequest, sheet: Sheet, others: readonly TagPlace[]): TagPlace | null {
   const { before, form } = request;
+  if (request.insist) return underTheHand(request, sheet, others);
   if (!before || before.dragged || before.form !== form || !before.free) return null;
   const same = placeOf(request, form, { ...before.box, ...request.sizes[form] }, true, false);
   return judge(request, same, sheet, others).free ? same : null;
