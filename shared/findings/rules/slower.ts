@@ -2,16 +2,18 @@ import type { FindingContext } from '../context.ts';
 import type { Finding, Phrase } from '../finding.ts';
 import { flow, say, share } from '../phrase.ts';
 import { integrate, mean, type Window } from '../series.ts';
-import { feedingPumps } from '../supply-path.ts';
+import { commandOf, feedingPumps } from '../supply-path.ts';
 
 /** Rods that move slower than the pump should drive them: where the flow goes. Stop × speed is compared with what the
- *  chambers take in, over the time in which something moves. */
+ *  pistons sweep, over the time in which a rod moves as commanded. */
 
 /** A rod moves above this [m/s]. */
 const MOVING = 5e-3;
 /** Below this share of the pump's stop flow it is said. Choice of the model. */
 const SHARE = 0.8;
 const LEAST_TIME = 0.3;
+/** What enters a chamber beyond what its piston sweeps, less than this: compression [m³/s]. */
+const PAST_PISTON = 0.5e-3 / 60;
 
 export function slowerRules(context: FindingContext): Finding[] {
   return context.ofKind('compensated-pump').flatMap((pump) => slower(context, pump.id));
@@ -24,14 +26,22 @@ function slower(context: FindingContext, pump: string): Finding[] {
   const cylinders = context.ofKind('cylinder').filter((cylinder) => feedingPumps(context, cylinder.id).includes(pump));
   if (!speed || cylinders.length === 0) return [];
   const taken = new Float64Array(context.times.length);
-  for (const { id } of cylinders) {
+  const passed = cylinders.map(() => new Float64Array(context.times.length));
+  for (const [k, { id }] of cylinders.entries()) {
     const velocity = context.column(`${id}.velocity`);
     const cap = context.column(`${id}.A.flow`);
     const rod = context.column(`${id}.B.flow`);
-    if (!velocity || !cap || !rod) continue;
+    const command = commandOf(context, id);
+    if (!velocity || !cap || !rod || !command) continue;
+    const plate = context.plate(id);
+    const piston = (Math.PI / 4) * plate.number('bore') ** 2;
+    const ring = piston - (Math.PI / 4) * plate.number('rod') ** 2;
     for (let i = 0; i < taken.length; i++) {
-      const v = velocity[i]!;
-      if (Math.abs(v) > MOVING) taken[i] = taken[i]! + Math.max(0, v > 0 ? cap[i]! : rod[i]!);
+      const v = velocity[i]! * command(i);
+      if (!(v > MOVING)) continue;
+      const swept = v * (command(i) > 0 ? piston : ring);
+      taken[i] = taken[i]! + swept;
+      passed[k]![i] = Math.max(0, (command(i) > 0 ? cap[i]! : rod[i]!) - swept);
     }
   }
   const moving = taken.map((value) => (value > 0 ? 1 : 0));
@@ -67,7 +77,13 @@ function slower(context: FindingContext, pump: string): Finding[] {
         '; ',
         flow(integrate(context.times, taken, worst.window) / worst.time),
         ' arrives. ',
-        losses(context, pump, worst.window, moving),
+        losses(
+          context,
+          pump,
+          worst.window,
+          moving,
+          cylinders.map(({ id }, k) => ({ words: `past the piston of ${context.name(id)}`, values: passed[k]! })),
+        ),
       ),
       remedy: { words: say('Look first where the larger share goes; time the stroke without load and read the case-drain flow.') },
     },
@@ -80,9 +96,14 @@ function throttled(context: FindingContext, pump: string, window: Window): boole
   return stroke !== null && 1 - mean(context.times, stroke, window) / context.plate(pump).number('maxVolumeStop') > 1 - SHARE;
 }
 
-function losses(context: FindingContext, pump: string, window: Window, moving: Float64Array): Phrase {
-  const during = (address: string): number => {
-    const values = context.column(address);
+interface Passed {
+  readonly words: string;
+  readonly values: Float64Array;
+}
+
+function losses(context: FindingContext, pump: string, window: Window, moving: Float64Array, passed: readonly Passed[]): Phrase {
+  const during = (address: string): number => over(context.column(address));
+  const over = (values: Float64Array | null): number => {
     const time = integrate(context.times, moving, window);
     return values && time > 0
       ? integrate(
@@ -95,6 +116,10 @@ function losses(context: FindingContext, pump: string, window: Window, moving: F
   const shares: { words: string; amount: number }[] = [{ words: 'through the case drain', amount: during(`${pump}.caseFlow`) }];
   for (const relief of context.ofKind('relief-valve'))
     shares.push({ words: `over ${context.name(relief.id)}`, amount: during(`${relief.id}.flow`) });
+  for (const { words, values } of passed) {
+    const amount = over(values);
+    if (amount > PAST_PISTON) shares.push({ words, amount });
+  }
   const stroke = context.column(`${pump}.displacement`);
   const stop = context.plate(pump).number('maxVolumeStop');
   const off = stroke ? 1 - mean(context.times, stroke, window) / stop : 0;

@@ -185,6 +185,22 @@ describe('rod', () => {
     expect(seek!.high).toBeCloseTo((215 * bar) / 1.054 - 10 * bar, 0);
   });
 
+  it('that never moves because the pump gives nothing stops short; no screw is offered', () => {
+    const nothing = { ...stuck, 'A1.position': -1e-7, 'A1.velocity': 0, 'A1.loadForce': 0, 'A1.A.pressure': -1e-6, 'P1.flow': 0 };
+    const result = assess({ channels: { ...nothing, 'P1.outlet.pressure': -1e-6 } });
+    expect(result.verdict.id).toBe('rod-stops-short');
+    const finding = find(result, 'rod-stops-short');
+    expect(words(finding.cause)).toContain('gives no flow');
+    expect(finding.remedy?.seek).toBeUndefined();
+  });
+
+  it('with a relief that lets the flow by far under the compensator is not offered a higher compensator', () => {
+    const passing = { 'V2.flow': 20 * litresPerMinute, 'V2.P.pressure': 18 * bar, 'P1.outlet.pressure': 18 * bar };
+    const finding = find(assess({ channels: { ...stuck, ...passing } }), 'rod-stops-short');
+    expect(finding.remedy?.seek).toBeUndefined();
+    expect(words(finding.cause)).toContain('crosses V2');
+  });
+
   it('at an end, at its force, at centre or with the motor stalled does not', () => {
     for (const channels of [
       { ...stuck, 'A1.position': 0.5 },
@@ -206,7 +222,19 @@ describe('rod', () => {
     };
     const finding = find(assess({ channels: moving, run: { phases } }), 'slower-than-pump');
     expect(words(finding.cause)).toContain('through the case drain');
-    const all = assess({ channels: { ...moving, 'A1.A.flow': 39 * litresPerMinute }, run: { phases } });
+    const fast = (t: number) => (t > 0.6 && t < 4 ? 0.21 : 0);
+    const all = assess({ channels: { ...moving, 'A1.velocity': fast, 'A1.A.flow': 39 * litresPerMinute }, run: { phases } });
     expect(rulesOf(all)).not.toContain('slower-than-pump');
+  });
+
+  it('whose piston lets oil by is slower, and is told so; a rod that drifts at centre is not', () => {
+    const phases = [{ label: 'Solenoid a on', from: 0.6, to: 5.2, channels: {} }];
+    const bypass = {
+      'A1.velocity': (t: number) => (t > 0.6 && t < 4 ? 0.08 : 0),
+      'A1.A.flow': 39 * litresPerMinute,
+      'P1.displacement': 28 * cubic,
+    };
+    expect(words(find(assess({ channels: bypass, run: { phases } }), 'slower-than-pump').cause)).toContain('past the piston of A1');
+    expect(rulesOf(assess({ channels: { ...bypass, 'V3.spool': 0 }, run: { phases } }))).not.toContain('slower-than-pump');
   });
 });
