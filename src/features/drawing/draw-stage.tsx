@@ -1,6 +1,6 @@
 import './drawing.css';
 import { type ReactNode, useEffect, useLayoutEffect, useRef } from 'react';
-import { ReactFlowProvider, useReactFlow } from 'reactflow';
+import { ReactFlowProvider, useReactFlow, useViewport } from 'reactflow';
 import { useSize } from '#src/lib/use-size.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { DrawBar } from './draw-bar.tsx';
@@ -68,6 +68,7 @@ function Stage({ children }: { readonly children?: ReactNode }) {
         }}
       >
         <Sheet />
+        <ZoomOnSheet sheet={sheet} />
         <ProblemSlips width={room.width} height={room.height} />
         <SelectionTools width={room.width} height={room.height} />
         <NextStrip width={room.width} height={room.height} />
@@ -80,6 +81,13 @@ function Stage({ children }: { readonly children?: ReactNode }) {
       </p>
     </div>
   );
+}
+
+/** Tells the styles the zoom, so that rings keep a size that a hand can hit. */
+function ZoomOnSheet({ sheet }: { readonly sheet: React.RefObject<HTMLElement | null> }) {
+  const { zoom } = useViewport();
+  useEffect(() => sheet.current?.style.setProperty('--zoom', zoom.toFixed(3)), [sheet, zoom]);
+  return null;
 }
 
 /** Gives the focus to what an action asked for, as soon as the canvas has drawn it. */

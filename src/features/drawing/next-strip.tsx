@@ -7,6 +7,7 @@ import { allNextParts, likelyJoin, nextParts } from '#shared/circuit/next-parts.
 import type { CircuitDocument, PortRef } from '#shared/circuit/schema.ts';
 import { Icon } from '#src/components/icons.tsx';
 import { SymbolIcon } from '#src/components/schematic/symbol-icon.tsx';
+import { useLayout } from '#src/lib/layout.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { growAt, joinPorts, joinTargets, takeApart } from './actions.ts';
 import { closeStrip, openStrip, useDrawing } from './drawing-store.ts';
@@ -51,6 +52,7 @@ interface OpenStripProps {
 function OpenStrip({ portRef, list, document, place, room }: OpenStripProps) {
   const { x, y, zoom } = useViewport();
   const box = useRef<HTMLDivElement>(null);
+  const phone = useLayout() === 'phone';
   const [size, setSize] = useState({ width: 0, height: 0 });
   const { question, choices } = useMemo(() => choicesAt(document, portRef, list), [document, portRef, list]);
   const likely = Math.max(
@@ -110,7 +112,7 @@ function OpenStrip({ portRef, list, document, place, room }: OpenStripProps) {
         role="menu"
         aria-label={question}
         tabIndex={-1}
-        style={{ left, top, opacity: drawn ? undefined : 0 }}
+        style={phone ? undefined : { left, top, opacity: drawn ? undefined : 0 }}
         onKeyDown={handleKey}
       >
         <div className="strip-head" role="presentation">

@@ -42,7 +42,12 @@ export const PartNode = memo(function PartNode({ id, data, selected }: NodeProps
   }
 
   return (
-    <div className="part" data-selected={selected || undefined} style={{ width: width * MODULE, height: height * MODULE }}>
+    <div
+      className="part"
+      data-selected={selected || undefined}
+      data-junction={component.kind === 'junction' || undefined}
+      style={{ width: width * MODULE, height: height * MODULE }}
+    >
       <svg
         className="part-symbol"
         width={width * MODULE}

@@ -4,6 +4,7 @@ import { findComponent, findKind } from '#shared/circuit/kind-lookup.ts';
 import type { CircuitDocument } from '#shared/circuit/schema.ts';
 import { placedBox } from '#shared/symbols/place.ts';
 import { symbolOf } from '#shared/symbols/registry.ts';
+import { useLayout } from '#src/lib/layout.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { deleteChosen, deleteNow, duplicateChosen, mirrorChosen, turnChosen } from './actions.ts';
 import { say, useDrawing } from './drawing-store.ts';
@@ -20,6 +21,7 @@ export function SelectionTools({ width, height }: { readonly width: number; read
   const strip = useDrawing((state) => state.strip);
   const deletion = useDrawing((state) => state.deletion);
   const { x, y, zoom } = useViewport();
+  const phone = useLayout() === 'phone';
   const box = boundsOf(document, selection);
   const lineOnly = selection.length > 0 && !box;
   if (selection.length === 0 || strip)
@@ -44,7 +46,7 @@ export function SelectionTools({ width, height }: { readonly width: number; read
     <>
       {frame && <div className="selection-frame" style={frame} aria-hidden="true" />}
       {!dragging && !deletion && (
-        <div className="tools" role="toolbar" aria-label="Selected" style={{ left, top }}>
+        <div className="tools" role="toolbar" aria-label="Selected" style={phone ? undefined : { left, top }}>
           {shown.map(([name, act]) => (
             <button key={name} type="button" className="tool" onClick={() => act(selection)}>
               <ToolIcon name={name} />
