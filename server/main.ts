@@ -23,8 +23,8 @@ class StartProblem extends Error {}
 async function openDatabase(url: string): Promise<DataSource> {
   const source = createDataSource(url);
   try {
+    await runMigrations(url);
     await source.initialize();
-    await runMigrations(source);
     return source;
   } catch (error) {
     const sentence = databaseProblem(error, databasePlace(url));

@@ -34,8 +34,8 @@ async function run(args: readonly string[]): Promise<{ code: number; words: stri
   if (!url) return { code: 2, words: USAGE };
   const source = createDataSource(url);
   try {
+    await runMigrations(url);
     await source.initialize();
-    await runMigrations(source);
     const words = await obey(createShopService(createShopStore(source)), args);
     return words === null ? { code: 2, words: USAGE } : { code: 0, words };
   } catch (error) {

@@ -5,8 +5,9 @@ import { migrations } from './migrations/list.ts';
 const CONNECT_TIMEOUT_MS = 5000;
 const STATEMENT_TIMEOUT_MS = 15_000;
 
-/** A data source that never changes the schema by itself: migrations only. */
-export function createDataSource(url: string): DataSource {
+/** A data source that never changes the schema by itself: migrations only.
+ *  @param statementTimeout longest time of one statement [ms]; 0 = no limit */
+export function createDataSource(url: string, { statementTimeout = STATEMENT_TIMEOUT_MS } = {}): DataSource {
   return new DataSource({
     type: 'postgres',
     url,
@@ -21,7 +22,7 @@ export function createDataSource(url: string): DataSource {
     invalidWhereValuesBehavior: { null: 'throw', undefined: 'throw' },
     connectTimeoutMS: CONNECT_TIMEOUT_MS,
     poolSize: 10,
-    extra: { statement_timeout: STATEMENT_TIMEOUT_MS },
+    extra: { statement_timeout: statementTimeout },
     // An idle connection that breaks is replaced by the pool; the next query, or /api/health, reports what matters.
     poolErrorHandler: () => {},
   });

@@ -11,14 +11,14 @@ async function migrate(direction: string | undefined): Promise<string> {
   if (!config.ok) return refuse(configProblem(config.problems));
   const url = config.value.databaseUrl;
   if (!url) return refuse('Set DATABASE_URL to the database whose schema is meant.');
-  const source = createDataSource(url);
+  const source = createDataSource(url, { statementTimeout: 0 });
   try {
-    await source.initialize();
     if (direction === 'down') {
+      await source.initialize();
       await source.undoLastMigration();
       return 'The last migration was taken back.';
     }
-    const names = await runMigrations(source);
+    const names = await runMigrations(url);
     return names.length === 0 ? 'The schema is up to date.' : `Done: ${names.join(', ')}.`;
   } catch (error) {
     const sentence = databaseProblem(error, databasePlace(url));

@@ -8,7 +8,7 @@ let server: TestServer;
 beforeAll(async () => {
   server = await startTestServer({
     databaseUrl: (await createTestDatabase(inject('clusterUrl'))).url,
-    simulate: { simulate: () => Promise.reject(new Error('secret-password in /home/somebody')) },
+    simulate: { simulate: () => Promise.reject(new Error('secret-password in /srv/somebody')) },
   });
 });
 afterAll(() => server.close());

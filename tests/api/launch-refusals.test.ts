@@ -2,9 +2,11 @@ import { mkdtempSync, rmSync } from 'node:fs';
 import { createServer } from 'node:net';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { expect, inject, test } from 'vitest';
+import { expect, inject, test, vi } from 'vitest';
 import { databaseUrl } from '../support/database.ts';
 import { runNode } from '../support/run-node.ts';
+
+vi.setConfig({ testTimeout: 150_000 });
 
 const start = (env: Record<string, string>) => runNode(['server/launch/start.mjs'], { PORT: '0', ...env });
 

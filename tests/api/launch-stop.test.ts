@@ -2,8 +2,13 @@ import { type ChildProcess, spawn } from 'node:child_process';
 import { chmodSync, existsSync, mkdtempSync, readdirSync, readFileSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
-import { afterEach, beforeEach, expect, test } from 'vitest';
+import { afterEach, beforeEach, expect, inject, test, vi } from 'vitest';
+import { runMigrations } from '#server/db/run-migrations.ts';
+import { createTestDatabase } from '../support/database.ts';
 import { cleanEnvironment, projectRoot } from '../support/run-node.ts';
+
+/** Starts in these tests take a second; a busy machine may need many. */
+vi.setConfig({ testTimeout: 150_000 });
 
 let folder: string;
 beforeEach(() => {
@@ -14,10 +19,12 @@ beforeEach(() => {
 afterEach(() => rmSync(folder, { recursive: true, force: true }));
 
 /** npm start's launcher on a free port with a data folder of its own, up to the line that says it is ready. */
-async function start(): Promise<{ child: ChildProcess; address: string; ended: Promise<number | null> }> {
+async function start(
+  env: Readonly<Record<string, string>> = {},
+): Promise<{ child: ChildProcess; address: string; ended: Promise<number | null> }> {
   const child = spawn(process.execPath, ['server/launch/start.mjs'], {
     cwd: projectRoot,
-    env: cleanEnvironment({ PORT: '0', DATA_DIR: join(folder, 'data') }),
+    env: cleanEnvironment({ PORT: '0', DATA_DIR: join(folder, 'data'), ...env }),
     stdio: ['ignore', 'pipe', 'inherit'],
   });
   const ended = new Promise<number | null>((resolve) => {
@@ -78,4 +85,15 @@ test('after a kill the next start finds the data again and needs no help', async
   second.child.kill('SIGTERM');
   await second.ended;
   expect(existsSync(join(folder, 'data', 'postgres', 'postmaster.pid'))).toBe(false);
+});
+
+test('with DATABASE_URL that database is migrated and used, and no other is made', async () => {
+  const database = await createTestDatabase(inject('clusterUrl'), { migrated: false });
+  const { child, address, ended } = await start({ DATABASE_URL: database.url });
+  expect(((await (await fetch(`${address}api/health`)).json()) as { database: string }).database).toBe('answers');
+  expect(await runMigrations(database.url), 'the server has migrated already').toEqual([]);
+  child.kill('SIGTERM');
+  await ended;
+  expect(existsSync(join(folder, 'data'))).toBe(false);
+  await database.drop();
 });

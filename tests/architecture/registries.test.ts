@@ -33,3 +33,10 @@ test('every route of the server is in the list of contracts', () => {
   const mounted = [...app.matchAll(/router\.use\('(\/[a-z./-]+)'/g)].map((match) => `/api${match[1]}`);
   expect(mounted.sort()).toEqual([...new Set(routes.map((route) => route.path))].sort());
 });
+
+test('every service asks a policy', () => {
+  const services = filesUnder('server/features').filter((path) => path.endsWith('.service.ts'));
+  expect(services.length).toBeGreaterThan(0);
+  const silent = services.filter((path) => !/from '\.\/[a-z-]+\.policy\.ts'/.test(textOf(path)));
+  expect(silent).toEqual([]);
+});

@@ -1,6 +1,7 @@
 import { type ChildProcess, fork } from 'node:child_process';
 import { fileURLToPath } from 'node:url';
 import type { TestProject } from 'vitest/node';
+import { buildProduct } from './build-product.ts';
 import { startTestCluster } from './database.ts';
 
 declare module 'vitest' {
@@ -12,9 +13,14 @@ declare module 'vitest' {
 
 const path = (relative: string) => fileURLToPath(new URL(`../../${relative}`, import.meta.url));
 
-/** Once for all browser tests: the built client and server, as npm start runs them, on a free port with a database of their own. */
+/** Once for all browser tests: the built client and server, as npm start runs them, on a free port with a database of their own.
+ *  With BROWSER_ADDRESS (with its closing slash) a product that runs there already is used as it is. */
 export default async function setup(project: TestProject): Promise<() => Promise<void>> {
-  await build();
+  if (process.env.BROWSER_ADDRESS) {
+    project.provide('baseUrl', process.env.BROWSER_ADDRESS);
+    return async () => undefined;
+  }
+  await buildProduct();
   const cluster = await startTestCluster();
   const server = fork(path('dist/server/main.js'), [], {
     execArgv: [],
@@ -38,13 +44,6 @@ export default async function setup(project: TestProject): Promise<() => Promise
     await ended;
     await cluster.stop();
   };
-}
-
-function build(): Promise<void> {
-  return new Promise((resolve, reject) => {
-    const child = fork(path('server/launch/build.mjs'), [], { execArgv: [], stdio: 'inherit' });
-    child.on('exit', (code) => (code === 0 ? resolve() : reject(new Error('the product could not be built'))));
-  });
 }
 
 function readyAddress(server: ChildProcess): Promise<string> {

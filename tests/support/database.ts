@@ -5,7 +5,6 @@ import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 import pg from 'pg';
-import { createDataSource } from '#server/db/data-source.ts';
 import { runMigrations } from '#server/db/run-migrations.ts';
 
 const keeper = fileURLToPath(new URL('../../server/launch/postgres-keeper.mjs', import.meta.url));
@@ -64,10 +63,7 @@ async function command(clusterUrl: string, sql: string): Promise<void> {
 /** Migrates the database that every test file gets a copy of. */
 export async function makeTemplate(clusterUrl: string): Promise<void> {
   await command(clusterUrl, `create database ${TEMPLATE}`);
-  const source = createDataSource(databaseUrl(clusterUrl, TEMPLATE));
-  await source.initialize();
-  await runMigrations(source);
-  await source.destroy();
+  await runMigrations(databaseUrl(clusterUrl, TEMPLATE));
 }
 
 export interface TestDatabase {
