@@ -21,14 +21,24 @@ export default defineConfig({
         test: {
           name: 'unit',
           environment: 'node',
+          testTimeout: 30_000,
           include: ['shared/**/*.test.ts', 'server/**/*.test.ts', 'src/**/*.test.ts', 'tests/architecture/**/*.test.ts'],
         },
       },
       {
         extends: true,
-        test: { name: 'web', environment: 'jsdom', include: ['src/**/*.test.tsx'], setupFiles: ['tests/support/web-setup.ts'] },
+        test: {
+          name: 'web',
+          environment: 'jsdom',
+          include: ['src/**/*.test.tsx'],
+          testTimeout: 30_000,
+          setupFiles: ['tests/support/web-setup.ts'],
+        },
       },
-      { extends: true, test: { name: 'physics', environment: 'node', include: ['tests/physics/**/*.test.ts'], testTimeout: 120_000 } },
+      {
+        extends: true,
+        test: { name: 'physics', environment: 'node', include: ['tests/physics/**/*.test.ts'], testTimeout: 120_000, hookTimeout: 120_000 },
+      },
       {
         extends: true,
         test: {
