@@ -15,6 +15,9 @@ export class StepRecorder {
   private readonly system: CircuitSystem;
   private readonly reader: ColumnReader;
   private readonly y: Float64Array;
+  /** Steps up to this length [s] are recorded at their middle and end only, longer ones at every quarter: the picture of a run
+   *  has no more than a few thousand places across. */
+  private readonly short: number;
 
   constructor(system: CircuitSystem) {
     this.system = system;
@@ -24,6 +27,7 @@ export class StepRecorder {
     this.audit = new Audit(system);
     this.phases = new PhaseTracker(system.circuit.document, this.rows);
     this.y = new Float64Array(system.length);
+    this.short = system.circuit.duration / 4000;
   }
 
   private row(time: number): void {
@@ -66,7 +70,7 @@ export class StepRecorder {
       if (!whole) integrator.dense(q, y);
       const time = whole ? integrator.to : integrator.from + q * length;
       system.read(time, whole ? integrator.after : y);
-      this.row(time);
+      if (k % 2 === 0 || length > this.short) this.row(time);
       if (k % 2 === 0) this.audit.sample(k / 2);
       tripped = this.signals.look(integrator, end * ((k - 1) / 4), q) ?? tripped;
       if (tripped !== null && end === 1) return tripped;
