@@ -13,6 +13,9 @@ export function oilHeat(context: Pick<FindingContext, 'run' | 'seen'>): number {
   return Object.entries(audit.heatBy).reduce((sum, [id, joules]) => sum + (motors.has(id) ? 0 : joules), 0) / time;
 }
 
+/** No tank is run up to here, and the oil’s data end: a settling temperature above it means nothing [K]: 120 °C. */
+const NO_OIL = 393.15;
+
 /** Heat of the repeated duty against what the tank gives off at 60 °C with air at 20 °C. */
 export function heatRules(context: FindingContext): Finding[] {
   const { audit, time } = context.run;
@@ -42,9 +45,9 @@ export function heatRules(context: FindingContext): Finding[] {
         figure(OIL_WARNING, 'temperature'),
         ' in air of ',
         figure(AMBIENT, 'temperature'),
-        '. Without a cooler it would settle at ',
-        figure(settles, 'temperature'),
-        '.',
+        settles < NO_OIL
+          ? say('. Without a cooler it would settle at ', figure(settles, 'temperature'), '.')
+          : say('. Without a cooler it would not settle under ', figure(NO_OIL, 'temperature'), '.'),
         worst ? say(` The largest part comes from ${context.name(worst[0])}: `, heat(worst[1] / time), '.') : '',
       ),
       remedy: { words: say('Take the heat away where it is made before adding a cooler.') },

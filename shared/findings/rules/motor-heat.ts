@@ -2,7 +2,8 @@ import { AFTER_A_TRIP } from '../cautions.ts';
 import type { DriveLoad, FindingContext } from '../context.ts';
 import { reliefsOf } from '../context.ts';
 import type { Finding } from '../finding.ts';
-import { LEAST_STALL_MARGIN, VOLTAGE_BAND } from '../house-rules.ts';
+import { LEAST_STALL_MARGIN } from '../house-rules.ts';
+import { lowVolts, outOfBand, voltsShare, weakMotor } from '../motor-state.ts';
 import { current, figure, margin, multiple, say, share, span, torque } from '../phrase.ts';
 import { compensatorDown, cracking, stopIn } from '../remedies.ts';
 import { highest } from '../series.ts';
@@ -43,6 +44,9 @@ function trips(context: FindingContext, drive: DriveLoad): Finding[] {
   if (yardsticks.tripTime === null || !relay) return [];
   const motor = drive.component.id;
   const ultimate = relay.k * relay.dial;
+  const carries = say('; dialled to ', current(relay.dial), ' the relay lets ', current(ultimate), ' pass for ever and trips on more.');
+  const within = yardsticks.tripTime > context.end;
+  const started = drive.running !== null;
   return [
     {
       id: `will-trip:${motor}`,
@@ -53,26 +57,22 @@ function trips(context: FindingContext, drive: DriveLoad): Finding[] {
       component: motor,
       headline: say('Overload relay trips in ', span(yardsticks.tripTime)),
       cause: yardsticks.stalled
-        ? say(
-            'Stalled, the motor draws ',
-            current(yardsticks.stallCurrent ?? 0, `${motor}.current`),
-            '; dialled to ',
-            current(relay.dial),
-            ' the relay carries ',
-            current(ultimate),
-            ' and no more for ever.',
-          )
-        : say(
-            'Repeated, the duty draws ',
-            current(yardsticks.rmsCurrent * facts.ratedCurrent),
-            ' RMS (',
-            share(yardsticks.rmsCurrent),
-            ' of nameplate); dialled to ',
-            current(relay.dial),
-            ' the relay carries ',
-            current(ultimate),
-            ' and no more for ever.',
-          ),
+        ? say('Stalled, the motor draws ', current(yardsticks.stallCurrent ?? 0, `${motor}.current`), carries)
+        : !within || !started
+          ? say(
+              started ? 'In this run it draws ' : 'Without coming up to speed the motor draws ',
+              current(context.at(`${motor}.current`, Math.max(0, Math.min(context.end, yardsticks.tripTime) - 0.05)), `${motor}.current`),
+              started ? ' when the relay has warmed up to its trip point' : '',
+              carries,
+            )
+          : say(
+              'Repeated, the duty draws ',
+              current(yardsticks.rmsCurrent * facts.ratedCurrent),
+              ' RMS (',
+              share(yardsticks.rmsCurrent),
+              ' of nameplate)',
+              carries,
+            ),
       remedy:
         yardsticks.stalled || drive.running === null
           ? {
@@ -82,7 +82,15 @@ function trips(context: FindingContext, drive: DriveLoad): Finding[] {
                   : 'Cure the start first; a higher dial only lets the motor burn.',
               ),
             }
-          : lighten(context, drive, 'not-tripping'),
+          : relay.dial < 0.95 * facts.ratedCurrent && yardsticks.rmsCurrent <= facts.serviceFactor && within
+            ? {
+                words: say(
+                  'The motor stays inside its nameplate, ',
+                  current(facts.ratedCurrent),
+                  ', but the dial stands under it. Have the dial checked against the nameplate by a licensed electrician; never set it above.',
+                ),
+              }
+            : lighten(context, drive, 'not-tripping'),
       caution: AFTER_A_TRIP,
     },
   ];
@@ -90,7 +98,8 @@ function trips(context: FindingContext, drive: DriveLoad): Finding[] {
 
 function over(context: FindingContext, drive: DriveLoad): Finding[] {
   const { yardsticks, facts } = drive;
-  if (yardsticks.stalled || drive.running === null || outOfBand(drive) !== null || yardsticks.rmsCurrent <= facts.serviceFactor) return [];
+  if (yardsticks.stalled || drive.running === null || outOfBand(context, drive) !== null || yardsticks.rmsCurrent <= facts.serviceFactor)
+    return [];
   const motor = drive.component.id;
   return [
     {
@@ -115,7 +124,7 @@ function over(context: FindingContext, drive: DriveLoad): Finding[] {
       remedy:
         yardsticks.tripTime === null
           ? lighten(context, drive, 'within-limits')
-          : { words: say('What keeps the relay shut brings the motor back to its nameplate, or nearly.') },
+          : { words: say('What keeps the overload relay from tripping brings the motor back to its nameplate, or nearly.') },
     },
   ];
 }
@@ -137,31 +146,31 @@ function smallMargin(context: FindingContext, drive: DriveLoad): Finding[] {
       headline: say('Stall margin ', margin(stallMargin)),
       cause: say(
         'The highest torque asked is ',
-        torque(drive.lowestPullOut / stallMargin),
+        torque(drive.yardsticks.peakTorque * drive.facts.ratedTorque),
         ' against a pull-out torque of ',
         torque(drive.lowestPullOut),
         ' at the lowest supply; the house rule asks for ',
         margin(LEAST_STALL_MARGIN),
         '.',
       ),
-      remedy: stopIn(context, drive, 'not-stalled-with-margin', say('Turn the max. volume stop in until the margin is there.')),
+      remedy: lowVolts(context, drive)
+        ? { words: say('Have the supply cured first by a licensed electrician; then look at the stop.') }
+        : (weakMotor(context, drive) ??
+          stopIn(context, drive, 'not-stalled-with-margin', say('Turn the max. volume stop in until the margin is there.'))),
     },
   ];
 }
 
-/** Terminal voltage furthest outside ±10 % of nameplate, or null. */
-function outOfBand(drive: DriveLoad): number | null {
-  const rated = drive.facts.ratedVoltage;
-  if (drive.voltage.low < (1 - VOLTAGE_BAND) * rated) return drive.voltage.low;
-  return drive.voltage.high > (1 + VOLTAGE_BAND) * rated ? drive.voltage.high : null;
-}
-
 function supply(context: FindingContext, drive: DriveLoad): Finding[] {
-  const volts = outOfBand(drive);
+  const volts = outOfBand(context, drive);
   if (volts === null) return [];
   const motor = drive.component.id;
   const rated = drive.facts.ratedVoltage;
-  const off = Math.abs(volts - rated) / rated;
+  const kept = voltsShare(context, drive, volts);
+  const off = Math.abs(kept - 1);
+  const plate = context.plate(motor).number('ratedFrequency');
+  const hertz = context.constants.supplyFrequency;
+  const other = Math.abs(hertz - plate) > 0.5;
   return [
     {
       id: `supply-out-of-band:${motor}`,
@@ -169,11 +178,13 @@ function supply(context: FindingContext, drive: DriveLoad): Finding[] {
       severity: 1,
       caseId: context.caseId,
       component: motor,
-      headline: say('Supply ', share(off), volts < rated ? ' under nameplate' : ' over nameplate'),
+      headline: say('Supply ', share(off), kept < 1 ? ' under nameplate' : ' over nameplate', other ? ' in volts per hertz' : ''),
       cause: say(
         figure(volts, 'voltage', { address: `${motor}.terminalVoltage` }),
+        other ? say(' at ', figure(hertz, 'frequency')) : '',
         ' at the terminals against ',
         figure(rated, 'voltage'),
+        other ? say(' at ', figure(plate, 'frequency')) : '',
         ' on the nameplate: no nameplate rating applies. Pull-out torque is ',
         torque(drive.lowestPullOut),
         ' there.',

@@ -82,7 +82,11 @@ export function withinLimitsRule(context: FindingContext): Finding[] {
       severity: 3,
       verdict: 'within-limits',
       caseId: context.caseId,
-      headline: job ? say('Within limits, ', job) : say('Within limits'),
+      headline: context.requirements.some((result) => !result.met)
+        ? say('Within limits, but the job asked for is not done')
+        : job
+          ? say('Within limits, ', job)
+          : say('Within limits'),
       cause:
         y && y.stallMargin !== null
           ? say(

@@ -1,9 +1,9 @@
 import { LOAD_HOLDING, RELIEF_IS_THE_SAFETY_DEVICE } from '../cautions.ts';
-import type { FindingContext } from '../context.ts';
+import type { DriveLoad, FindingContext } from '../context.ts';
 import { reliefsOf } from '../context.ts';
 import type { Finding } from '../finding.ts';
 import { figure, pressure, say } from '../phrase.ts';
-import { highest, lowest, stretches } from '../series.ts';
+import { highest, integrate, lowest, mean, stretches, type Window } from '../series.ts';
 import { feedingPumps } from '../supply-path.ts';
 
 /** No relief protects a net; the load drives the pump backwards; pressure left behind a closed valve. */
@@ -16,7 +16,9 @@ function unprotectedPumps(context: FindingContext): Finding[] {
   return context.ofKind('compensated-pump').flatMap((pump) => {
     const nets = context.reach.always(`${pump.id}.outlet`);
     const free = context.ofKind('tank').some((tank) => nets.has(context.reach.netOf(`${tank.id}.T`)));
-    const working = reliefsOf(context, pump.id).filter((relief) => context.plate(relief.id).number('fault.stuck-shut') < 0.5);
+    const reliefs = reliefsOf(context, pump.id);
+    const working = reliefs.filter((relief) => context.plate(relief.id).number('fault.stuck-shut') < 0.5);
+    const shut = reliefs[0] ? context.name(reliefs[0].id) : null;
     if (free || working.length > 0) return [];
     const values = context.column(`${pump.id}.outlet.pressure`);
     const peak = values ? highest(context.times, values, { from: 0, to: context.end }) : null;
@@ -31,14 +33,17 @@ function unprotectedPumps(context: FindingContext): Finding[] {
         ...(peak ? { time: peak.time } : {}),
         headline: say(`No relief protects the outlet of ${context.name(pump.id)}`),
         cause: say(
-          'From this pump no relief is reached whatever the valves do. The compensator is set to ',
+          shut ? `${shut} is on its line but stuck shut.` : 'From this pump no relief is reached whatever the valves do.',
+          ' The compensator is set to ',
           pressure(context.plate(pump.id).number('compensatorPressure')),
           '; it is a control and can stick.',
           peak ? say(' The highest pressure of this run is ', pressure(peak.value, `${pump.id}.outlet.pressure`), '.') : '',
         ),
         remedy: {
           words: say(
-            'Join a relief to the pump line, before the first valve that can close, sized for the whole flow with the compensator failed.',
+            shut
+              ? `Stop, and have ${shut} replaced or repaired and proved before the pump runs again. Turning its screw does not cure it.`
+              : 'Join a relief to the pump line, before the first valve that can close, sized for the whole flow with the compensator failed.',
           ),
         },
         caution: RELIEF_IS_THE_SAFETY_DEVICE,
@@ -95,14 +100,20 @@ function unprotectedChambers(context: FindingContext): Finding[] {
 
 /** Turning back this fast counts [rad/s]. */
 const BACKWARDS = 2;
+/** …and this far [rad]: oil pressed together between pump and check valve springs the shaft back by less. */
+const HALF_A_TURN = Math.PI;
 
 function backwards(context: FindingContext): Finding[] {
   return context.drives.flatMap((drive) => {
     if (drive.pumps.length === 0) return [];
     const motor = drive.component.id;
     const speed = context.column(`${motor}.speed`);
+    const torque = context.column(`${motor}.torque`);
     if (!speed) return [];
-    const stretch = stretches(context.times, (i) => -speed[i]! - BACKWARDS, 0.02)[0];
+    // A motor that itself pulls backwards (two leads exchanged) is no load that drives.
+    const stretch = stretches(context.times, (i) => -speed[i]! - BACKWARDS, 0.02).find(
+      (window) => -integrate(context.times, speed, window) >= HALF_A_TURN && !(torque && drivenBackwards(context, drive, torque, window)),
+    );
     if (!stretch) return [];
     const worst = lowest(context.times, speed, stretch);
     const pump = drive.pumps[0]!.id;
@@ -127,6 +138,13 @@ function backwards(context: FindingContext): Finding[] {
       },
     ];
   });
+}
+
+/** The field turns backwards: the motor draws current and is not braking. */
+function drivenBackwards(context: FindingContext, drive: DriveLoad, torque: Float64Array, window: Window): boolean {
+  const amps = context.column(`${drive.component.id}.current`);
+  if (!amps || mean(context.times, amps, window) < 0.02 * drive.facts.ratedCurrent) return false;
+  return mean(context.times, torque, window) < -1e-3 * drive.facts.ratedTorque;
 }
 
 function left(context: FindingContext): Finding[] {

@@ -13,15 +13,27 @@ function runningWindow(context: FindingContext, pump: string): Window {
   return context.drives.find((drive) => drive.pumps.some((entry) => entry.id === pump))?.running ?? { from: 0, to: context.end };
 }
 
+/** Faster than this a shaft draws oil [rad/s]. */
+const DRAWS = 1;
+
+function speedOf(context: FindingContext, pump: string): Float64Array | null {
+  const drive = context.drives.find((entry) => entry.pumps.some((part) => part.id === pump));
+  return drive ? context.column(`${drive.component.id}.speed`) : null;
+}
+
 function starving(context: FindingContext, pump: string): Finding[] {
   const values = context.column(`${pump}.suctionPressure`);
   const filling = context.column(`${pump}.filling`);
   if (!values) return [];
   const window = runningWindow(context, pump);
-  const least = lowest(context.times, values, window);
-  const fill = filling ? lowest(context.times, filling, window).value : 1;
+  // A shaft that stands or turns back draws nothing from the inlet.
+  const speed = speedOf(context, pump);
+  const draws = (column: Float64Array) => (speed ? column.map((value, i) => (speed[i]! > DRAWS ? value : Number.NaN)) : column);
+  const least = lowest(context.times, draws(values), window);
+  const fill = filling ? Math.min(1, lowest(context.times, draws(filling), window).value) : 1;
   if (!(least.value < INLET_WARNING) && !(fill < 0.98)) return [];
   const name = context.name(pump);
+  const air = context.constants.atmosphere;
   return [
     {
       id: `inlet-starving:${pump}`,
@@ -36,11 +48,18 @@ function starving(context: FindingContext, pump: string): Finding[] {
         figure(least.value, 'pressure', { address: `${pump}.suctionPressure`, digits: 2 }),
         ' absolute; the warning stands at ',
         figure(INLET_WARNING, 'pressure', { digits: 2 }),
-        '. Filling falls to ',
-        share(fill),
-        '.',
+        fill < 0.98 ? say('. Filling falls to ', share(fill), '.') : '. It still fills.',
+        air < INLET_WARNING / 0.95
+          ? say(' The air itself has ', figure(air, 'pressure', { digits: 2 }), ' at this altitude: nothing is left for the suction line.')
+          : '',
       ),
-      remedy: { words: say('Shorten or widen the suction line, clean the strainer, warm the oil, look at the breather.') },
+      remedy: {
+        words: say(
+          air < INLET_WARNING / 0.95
+            ? 'Put the tank above the pump or press it with air as the maker allows; ask the maker for the speed at this altitude.'
+            : 'Shorten or widen the suction line, clean the strainer, warm the oil, look at the breather.',
+        ),
+      },
     },
   ];
 }

@@ -107,6 +107,63 @@ describe('motor', () => {
     expect(figures(small.headline)[0]?.rounding).toBe('down');
   });
 
+  it('at 480 V and 60 Hz a 400 V 50 Hz plate has its volts per hertz; at 400 V and 60 Hz it has not', () => {
+    const at60 = (volts: number) =>
+      assess({
+        document: { ...demoCircuit, supply: { ...demoCircuit.supply, voltage: volts, frequency: 60 } },
+        channels: { 'M1.terminalVoltage': volts, 'M1.speed': (t) => Math.min(1, t / 0.1) * 183 },
+      });
+    expect(rulesOf(at60(480))).not.toContain('supply-out-of-band');
+    expect(values(find(at60(400), 'supply-out-of-band').headline)[0]).toBeCloseTo(1 / 6, 6);
+  });
+
+  it('that gives less than its plate is looked at before the pump’s screws', () => {
+    const dips = { 'M1.speed': (t: number) => (t < 0.1 ? (153 * t) / 0.1 : t > 2 && t < 2.3 ? 60 : 150) };
+    const finding = find(assess({ document: changed({ 'M1.fault.stuck-in-star': 1 }), channels: dips }), 'dips-and-recovers');
+    expect(finding.remedy?.seek).toBeUndefined();
+    expect(values(finding.remedy!.words)[1]).toBeCloseTo((2 * RATED) / 3, 0);
+    expect(find(assess({ channels: dips }), 'dips-and-recovers').remedy?.seek).toBeDefined();
+  });
+
+  it('that stalls on friction, not on oil, is turned by hand; in oil far too thick it is warmed', () => {
+    const stalled = { 'M1.speed': stall, 'P1.displacement': 8 * cubic, 'P1.outlet.pressure': 60 * bar };
+    const dry = find(assess({ channels: stalled }), 'motor-stalls').remedy!;
+    expect(dry.seek).toBeUndefined();
+    expect(words(dry.words)).toContain('turn the shaft by hand');
+    const cold = { ...demoCircuit, fluid: { ...demoCircuit.fluid, temperature: 268.15 } };
+    expect(words(find(assess({ document: cold, channels: stalled }), 'motor-stalls').remedy!.words)).toContain('Warm it first');
+  });
+
+  it('that turns the wrong way is told so, and neither driven by a load nor starving', () => {
+    const result = assess({
+      channels: { 'M1.speed': (t) => -Math.min(1, t / 0.1) * 156, 'M1.torque': -2.6, 'M1.current': 4.9, 'P1.filling': 0 },
+    });
+    expect(words(find(result, 'not-up-to-speed').headline)).toBe('Motor turns the wrong way');
+    expect(rulesOf(result)).not.toContain('load-drives-pump');
+    expect(rulesOf(result)).not.toContain('inlet-starving');
+  });
+
+  it('whose relay opens in the run says with what current, not with a mean that it could carry', () => {
+    const event = { component: 'M1', signal: 'overload-trip', rising: true, time: 6, label: 'trips' };
+    const result = assess({ channels: { 'M1.current': (t) => (t > 5 && t < 6 ? 40 : 8) }, run: { events: [event] } });
+    expect(values(find(result, 'will-trip').cause)[0]).toBe(40);
+  });
+
+  it('inside its nameplate on a dial set under it: the dial is checked, never set above', () => {
+    const remedy = find(assess({ document: changed({ 'M1.relayDial': 5 }), channels: { 'M1.current': 8 } }), 'will-trip').remedy!;
+    expect(remedy.seek).toBeUndefined();
+    expect(words(remedy.words)).toContain('never set it above');
+  });
+
+  it('without volts for a moment has a margin of nought, and every figure is a number', () => {
+    const dip = { id: 'dip', time: 3, ramp: 0, target: 'supply', input: 'voltage', value: 0, label: 'Dip' };
+    const document = { ...demoCircuit, duty: { ...demoCircuit.duty, commands: [...demoCircuit.duty.commands, dip] } };
+    const result = assess({ document, channels: { 'M1.torque': 50 } });
+    const all = result.findings.flatMap((finding) => [...values(finding.headline), ...values(finding.cause)]);
+    expect(values(find(result, 'small-stall-margin').cause)[0]).toBeCloseTo(50, 0);
+    expect(all.every(Number.isFinite)).toBe(true);
+  });
+
   it('outside ±10 % volts has no nameplate verdict, only the supply', () => {
     const result = assess({ channels: { 'M1.current': 12, 'M1.terminalVoltage': 348 } });
     const supply = find(result, 'supply-out-of-band');

@@ -45,7 +45,9 @@ describe('ratings and protection', () => {
   });
 
   it('a relief stuck shut protects nothing', () => {
-    expect(rulesOf(assess({ document: changed({ 'V2.fault.stuck-shut': 1 }) }))).toContain('no-relief');
+    const finding = find(assess({ document: changed({ 'V2.fault.stuck-shut': 1 }) }), 'no-relief');
+    expect(words(finding.cause)).toContain('stuck shut');
+    expect(words(finding.remedy!.words)).not.toContain('Join a relief');
   });
 
   it('oil held back on the rod side is intensified by the areas', () => {
@@ -82,6 +84,17 @@ describe('ratings and protection', () => {
     expect(finding.caution).toContain('does not hold a load');
   });
 
+  it('a shaft that springs back a little on oil shut in by a check valve is not driven by the load', () => {
+    const result = assess({
+      channels: {
+        'M1.speed': (t) => (t < 0.1 ? (153 * t) / 0.1 : t < 5 ? 150 : t < 5.1 ? -20 : 0),
+        'M1.current': (t) => (t > 4.9 ? 0 : 8),
+        'M1.terminalVoltage': (t) => (t > 4.9 ? 0 : 400),
+      },
+    });
+    expect(rulesOf(result)).not.toContain('load-drives-pump');
+  });
+
   it('pressure left behind a closed valve is named with its place', () => {
     const finding = find(assess({ run: { pressureLeft: [{ net: 'A1.B', label: 'A1 rod side', pressure: 90 * bar }] } }), 'pressure-left');
     expect(values(finding.headline)).toEqual([90 * bar]);
@@ -93,6 +106,13 @@ describe('pump, heat, outcome', () => {
   it('an inlet under 0.8 bar absolute warns; loss of filling starves', () => {
     expect(find(assess({ channels: { 'P1.suctionPressure': 0.7 * bar } }), 'inlet-starving').severity).toBe(2);
     expect(find(assess({ channels: { 'P1.suctionPressure': 0.3 * bar, 'P1.filling': 0.6 } }), 'inlet-starving').severity).toBe(1);
+  });
+
+  it('thin air at altitude is named, not the strainer', () => {
+    const document = { ...demoCircuit, site: { altitude: 4000 } };
+    const finding = find(assess({ document, channels: { 'P1.suctionPressure': 0.616 * bar } }), 'inlet-starving');
+    expect(words(finding.cause)).toContain('at this altitude');
+    expect(words(finding.remedy!.words)).not.toContain('strainer');
   });
 
   it('a stroke that swings without a command hunts', () => {
@@ -114,6 +134,7 @@ describe('pump, heat, outcome', () => {
     const finding = find(assess({ run: { audit: audit({ M1: 8e3, V2: 3e4 }) } }), 'heat');
     expect(values(finding.cause)[0]).toBeCloseTo(3e4 / 8, 6);
     expect(finding.component).toBe('V2');
+    expect(words(find(assess({ run: { audit: audit({ V2: 9e4 }) } }), 'heat').cause)).toContain('would not settle under');
     expect(rulesOf(assess({ run: { audit: audit({ M1: 5e4, P1: 4e3 }) } }))).not.toContain('heat');
   });
 
@@ -121,6 +142,7 @@ describe('pump, heat, outcome', () => {
     const slow = (t: number) => Math.min(53e3, t > 5 ? 53e3 : 1e3);
     const result = assess({ channels: { 'A1.loadForce': slow, 'A1.velocity': 0.05 } });
     expect(find(result, 'requirement').id).toBe('requirement:bale-time');
+    expect(words(find(result, 'within-limits').headline)).toContain('the job asked for is not done');
     expect(result.requirements.find((entry) => entry.id === 'bale-time')).toMatchObject({ met: false });
   });
 
