@@ -85,7 +85,7 @@ function onStopSign(stop: () => Promise<void>): void {
       () => process.exit(1),
     );
   };
-  for (const sign of ['SIGINT', 'SIGTERM', 'SIGHUP', 'disconnect']) process.on(sign, handle);
+  for (const sign of ['SIGINT', 'SIGTERM', 'disconnect']) process.on(sign, handle);
   if (process.send && !process.connected) handle();
 }
 

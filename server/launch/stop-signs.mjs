@@ -1,5 +1,6 @@
-/** Calls `stop` once for Ctrl-C, SIGTERM, a closed terminal, or when the process that started this one has gone
- *  (npm killed without a word). A second Ctrl-C calls `hurry`. */
+/** Calls `stop` once for Ctrl-C, SIGTERM, or when the process that started this one has gone
+ *  (npm killed without a word). A second Ctrl-C calls `hurry`.
+ *  A closed terminal is left to the system's default: it ends this process, and the closed channels end the others; nohup works. */
 export function onStopSign(stop, hurry) {
   let told = false;
   const handle = (signal) => {
@@ -8,7 +9,7 @@ export function onStopSign(stop, hurry) {
     clearInterval(watch);
     stop(signal);
   };
-  for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, () => handle(signal));
+  for (const signal of ['SIGINT', 'SIGTERM']) process.on(signal, () => handle(signal));
   const parent = process.ppid;
   const watch = setInterval(() => {
     if (process.ppid !== parent) handle('parent');
