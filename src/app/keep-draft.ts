@@ -1,7 +1,8 @@
 import { checkDocument } from '#shared/circuit/check-document.ts';
 import { demoCircuit } from '#shared/circuit/samples/demo.ts';
 import type { CircuitDocument } from '#shared/circuit/schema.ts';
-import { type Draft, holdDraft, readDraft, writeDraft, writeLastMoment } from '#src/lib/draft.ts';
+import { type Draft, holdDraft, putAside, readDraft, writeDraft, writeLastMoment } from '#src/lib/draft.ts';
+import { saveFile } from '#src/lib/save-file.ts';
 import { useCursor } from '#src/stores/cursor-store.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { useKeeping } from '#src/stores/keeping-store.ts';
@@ -26,11 +27,13 @@ export function openDemo(): void {
 function restore(draft: Draft): boolean {
   const checked = checkDocument(draft.document);
   if (!checked.ok) {
+    void putAside(draft).catch(() => undefined);
     useKeeping
       .getState()
-      .setNotice(
-        'The circuit kept on this device could not be read by this version, so the demo is shown. Nothing is overwritten before the first edit.',
-      );
+      .setNotice('The circuit kept on this device could not be read by this version, so the demo is shown. It is put aside, not deleted.', {
+        label: 'Save it as a file',
+        act: () => saveFile('unreadable-circuit.json', JSON.stringify(draft.document, null, 2), 'application/json'),
+      });
     return false;
   }
   useDocument.getState().load(checked.document);

@@ -4,6 +4,7 @@ import { useKeeping } from '#src/stores/keeping-store.ts';
 /** One strip above the sheet for what a person must know about the circuit in hand; never a blocking dialog. */
 export function NoticeStrip() {
   const notice = useKeeping((state) => state.notice);
+  const cure = useKeeping((state) => state.cure);
   const setNotice = useKeeping((state) => state.setNotice);
   const keeping = useKeeping((state) => state.keeping);
   const takeOver = useKeeping((state) => state.takeOver);
@@ -34,6 +35,11 @@ export function NoticeStrip() {
       {notice && (
         <div className="notice-strip no-print" role="status">
           <p>{notice}</p>
+          {cure && (
+            <button type="button" className="button" onClick={cure.act}>
+              {cure.label}
+            </button>
+          )}
           <button type="button" className="button-icon" aria-label="Put the notice away" onClick={() => setNotice(null)}>
             <Icon name="close" size={16} />
           </button>

@@ -4,6 +4,8 @@
 const DATABASE = 'swashbench';
 const STORE = 'drafts';
 const KEY = 'draft';
+/** A draft that this version cannot read is put aside under this key, so that the first edit does not overwrite it. */
+const ASIDE = 'unreadable';
 /** IndexedDB may not finish while a page is being put away: the last edits also go here, at once. */
 const LAST_MOMENT = 'swashbench-draft-last-moment';
 const LOCK = 'swashbench-draft';
@@ -54,17 +56,26 @@ export async function readDraft(): Promise<Draft | null> {
   return last && (!draft || last.savedAt > draft.savedAt) ? last : draft;
 }
 
+/** Puts a draft aside that cannot be read. */
+export function putAside(draft: Draft): Promise<void> {
+  return write(draft, ASIDE);
+}
+
 /** Keeps the draft; resolves when it is on the device. */
 export async function writeDraft(draft: Draft): Promise<void> {
+  await write(draft, KEY);
+  dropLastMoment();
+}
+
+async function write(draft: Draft, key: string): Promise<void> {
   const transaction = (await database()).transaction(STORE, 'readwrite');
   const done = new Promise<void>((resolve, reject) => {
     transaction.oncomplete = () => resolve();
     transaction.onabort = () => reject(transaction.error ?? new Error('The storage of this device is full.'));
     transaction.onerror = () => reject(transaction.error ?? new Error('The storage of this device refused.'));
   });
-  transaction.objectStore(STORE).put(draft, KEY);
+  transaction.objectStore(STORE).put(draft, key);
   await done;
-  dropLastMoment();
 }
 
 /** Keeps the draft at once, for the moment the page is put away. */

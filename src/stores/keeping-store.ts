@@ -9,12 +9,14 @@ export interface KeepingState {
   readonly reason: string | null;
   /** One sentence above the sheet that can be put away: an unreadable draft, a refused file. */
   readonly notice: string | null;
+  /** What can be done about the notice, as a button beside it. */
+  readonly cure: { readonly label: string; readonly act: () => void } | null;
   /** Takes the keeping over from another tab; null while this tab has it. */
   readonly takeOver: (() => void) | null;
   /** Opens what another tab kept, when both tabs have changed the circuit. */
   readonly openOther: (() => void) | null;
   setKeeping: (keeping: Keeping, reason?: string) => void;
-  setNotice: (notice: string | null) => void;
+  setNotice: (notice: string | null, cure?: KeepingState['cure']) => void;
   setTakeOver: (takeOver: (() => void) | null) => void;
   setOpenOther: (openOther: (() => void) | null) => void;
 }
@@ -23,10 +25,11 @@ export const useKeeping = create<KeepingState>()((set) => ({
   keeping: 'loading',
   reason: null,
   notice: null,
+  cure: null,
   takeOver: null,
   openOther: null,
   setKeeping: (keeping, reason) => set({ keeping, reason: reason ?? null }),
-  setNotice: (notice) => set({ notice }),
+  setNotice: (notice, cure) => set({ notice, cure: cure ?? null }),
   setTakeOver: (takeOver) => set({ takeOver }),
   setOpenOther: (openOther) => set({ openOther }),
 }));

@@ -4,7 +4,7 @@ import { Refusal } from '#src/components/quantity-field.tsx';
 import { useFormat } from '#src/components/use-format.ts';
 import type { TagSpec } from './tag-specs.ts';
 import type { TagState } from './tag-state.ts';
-import { typeValue } from './turning.ts';
+import { type Typed, takeValue, typeValue } from './turning.ts';
 
 export interface TagEntryProps {
   readonly spec: TagSpec;
@@ -33,7 +33,9 @@ export function TagEntry({ spec, state, first, onDone }: TagEntryProps) {
     tag?.focus({ preventScroll: true });
   }
   function take(text: string) {
-    const outcome = typeValue(spec, text, format.preferences);
+    settle(typeValue(spec, text, format.preferences));
+  }
+  function settle(outcome: Typed) {
     if (outcome.ok) back();
     else setRefusal(outcome.refusal);
   }
@@ -67,7 +69,12 @@ export function TagEntry({ spec, state, first, onDone }: TagEntryProps) {
       />
       {refusal && (
         <div id={id} role="alert" className="field-refusal tag-refusal">
-          <Refusal refusal={refusal} settled={settled} use={(_, typed) => take(typed)} keep={back} />
+          <Refusal
+            refusal={refusal}
+            settled={settled}
+            use={(value, typed) => settle(refusal.nearest ? takeValue(spec, value, typed) : typeValue(spec, typed, format.preferences))}
+            keep={back}
+          />
         </div>
       )}
     </div>

@@ -96,8 +96,14 @@ export function typeValue(spec: TagSpec, entry: string, preferences: UnitPrefere
     preferences,
   });
   if (!parsed.ok) return { ok: false, refusal: parsed };
-  if (state.locked) return { ok: false, refusal: { ok: false, reason: 'not-a-number', message: lockedRefusal(spec).message } };
-  const refused = applyValue(spec.target, spec.field, parsed.value, parsed.typed);
+  return takeValue(spec, parsed.value, parsed.typed);
+}
+
+/** Takes a value that was offered; `typed` only names it, in fewer digits. */
+export function takeValue(spec: TagSpec, value: number, typed: string): Typed {
+  if (presentState(spec)?.locked)
+    return { ok: false, refusal: { ok: false, reason: 'not-a-number', message: lockedRefusal(spec).message } };
+  const refused = applyValue(spec.target, spec.field, value, typed);
   if (refused) return { ok: false, refusal: { ok: false, reason: 'out-of-range', message: refused.message } };
   return { ok: true };
 }

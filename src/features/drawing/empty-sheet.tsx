@@ -5,11 +5,14 @@ import { SymbolIcon } from '#src/components/schematic/symbol-icon.tsx';
 import { useTheme } from '#src/lib/theme.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { startWithPump } from './actions.ts';
-import { say } from './drawing-store.ts';
+import { say, useDrawing } from './drawing-store.ts';
 
 /** What an empty sheet offers: a motor, a pump and a ring to touch, or a circuit that already runs. */
 export function EmptySheet({ onTaken }: { readonly onTaken: () => void }) {
   const theme = useTheme();
+  const placing = useDrawing((state) => state.placing);
+  // A part in hand goes where it is put.
+  if (placing) return null;
   return (
     <section className="empty-sheet" aria-label="Begin">
       <button
