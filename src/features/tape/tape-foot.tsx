@@ -17,10 +17,12 @@ export interface TapeFootProps {
   readonly sheet: TapeSheet;
   readonly onSheet: (sheet: TapeSheet) => void;
   readonly room: number;
+  /** Two buttons only; saving is in the sheet of lanes. */
+  readonly isNarrow: boolean;
 }
 
 /** Buttons under the readings: choose lanes, show the table, save traces. */
-export function TapeFoot({ document, model, sheet, onSheet, room }: TapeFootProps) {
+export function TapeFoot({ document, model, sheet, onSheet, room, isNarrow }: TapeFootProps) {
   const setChosen = useLaneChoice((state) => state.setChosen);
   const { preferences } = useFormat();
   const run = model.cases[model.activeIndex]?.run ?? null;
@@ -65,7 +67,6 @@ export function TapeFoot({ document, model, sheet, onSheet, room }: TapeFootProp
       </button>
     </>
   );
-  const narrow = room === 1;
   return (
     <>
       <div className="tape-foot">
@@ -75,7 +76,7 @@ export function TapeFoot({ document, model, sheet, onSheet, room }: TapeFootProp
         <button type="button" aria-pressed={sheet === 'table'} onClick={() => toggle('table')}>
           Table
         </button>
-        {!narrow && (
+        {!isNarrow && (
           <button type="button" aria-expanded={sheet === 'save'} onClick={() => toggle('save')}>
             Save
           </button>
@@ -84,7 +85,7 @@ export function TapeFoot({ document, model, sheet, onSheet, room }: TapeFootProp
       {sheet === 'lanes' && (
         <section className="tape-sheet" aria-label="Lanes">
           <LaneMenu document={document} run={run} shown={model.lanes.map((lane) => lane.lane.address)} most={room} onChoose={setChosen} />
-          {narrow && saving}
+          {isNarrow && saving}
         </section>
       )}
       {sheet === 'save' && (

@@ -145,13 +145,14 @@ export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true 
       className="tape"
       aria-label="Tape"
       data-lanes={lanes}
+      data-narrow={isNarrow || undefined}
       data-stale={anyStale || undefined}
       style={
         { '--tape-left': `${measures.left}px`, '--tape-band': `${Math.max(band.height, 2 * measures.rowHeight)}px` } as React.CSSProperties
       }
       onKeyDown={handleKey}
     >
-      <RunControls compact={lanes < 5 || isNarrow} words={lanes > 1} duration={model.duration} />
+      <RunControls compact={lanes < 5 || isNarrow} words={lanes === 5 && !isNarrow} duration={model.duration} />
       <div className="tape-band">
         <TapeMarks marks={band.marks} rowHeight={band.rowHeight} top={0} showTime={seconds} onPick={pick} onFinding={onFinding} />
         <TapeFlags
@@ -189,7 +190,7 @@ export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true 
         hidden={sheet === 'table'}
       />
       <TapeAxis model={model} geometry={geometry} />
-      <TapeFoot document={document} model={model} sheet={sheet} onSheet={setSheet} room={lanes} />
+      <TapeFoot document={document} model={model} sheet={sheet} onSheet={setSheet} room={lanes} isNarrow={lanes === 1 || isNarrow} />
       <EventTable document={document} model={model} findings={findings} visible={sheet === 'table'} />
       {sheet === 'flag' && (
         <section className="tape-sheet tape-sheet-right" aria-label="Add a flag">
