@@ -36,6 +36,7 @@ export function PrintSheet() {
     ground: 'white',
   });
   const places = findings.flatMap(({ number, finding }) => (finding.at ? [{ number, caseId: finding.caseId, ...finding.at }] : []));
+  const starts = document.duty.commands.map((command) => command.time);
   const shown = document.cases.filter((entry) => entry.id === activeCase || overlays.includes(entry.id));
   return (
     <article className="print-sheet">
@@ -69,7 +70,10 @@ export function PrintSheet() {
         <MotorLoad />
       </section>
       {loadCases.length > 0 && (
-        <SvgText label="Load picture" svg={loadPictureSvg(document.title, loadCases, places, preferences, useCursor.getState().time)} />
+        <SvgText
+          label="Load picture"
+          svg={loadPictureSvg(document.title, loadCases, places, preferences, useCursor.getState().time, starts)}
+        />
       )}
       <SvgText label="Tape" svg={tapeSvg(document, tape, preferences)} />
       <p className="print-caution">{STANDING_CAUTION}</p>

@@ -1,8 +1,10 @@
+import '@testing-library/jest-dom/vitest';
 import { render, screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { beforeEach, describe, expect, it } from 'vitest';
 import { effectiveNumber } from '#shared/circuit/effective.ts';
 import { demoCircuit } from '#shared/circuit/samples/demo.ts';
+import type { CircuitCase } from '#shared/circuit/schema.ts';
 import type { Assessment, Finding } from '#shared/findings/finding.ts';
 import { useCursor } from '#src/stores/cursor-store.ts';
 import { useDocument } from '#src/stores/document-store.ts';
@@ -10,7 +12,7 @@ import { useExplain } from '#src/stores/explain-store.ts';
 import { remedyKey, useRuns } from '#src/stores/run-store.ts';
 import { FindingsPanel } from './findings-panel.tsx';
 
-const [first, second] = demoCircuit.cases as [{ id: string }, { id: string }];
+const [first, second] = demoCircuit.cases as [CircuitCase, CircuitCase];
 
 function finding(id: string, severity: Finding['severity'], patch: Partial<Finding> = {}): Finding {
   return {
@@ -98,14 +100,12 @@ describe('FindingsPanel', () => {
     expect(screen.getByText(/Finding the setting/)).toBeVisible();
     expect(screen.queryByRole('button', { name: 'Try it as a new case' })).toBeNull();
     const value = 10e-6 / (2 * Math.PI);
-    useRuns
-      .getState()
-      .putRemedy(remedyKey(stall), {
-        found: true,
-        change: { target: 'P1', field: 'maxVolumeStop', value },
-        words: ['Margin 1.3.'],
-        runs: 7,
-      });
+    useRuns.getState().putRemedy(remedyKey(stall), {
+      found: true,
+      change: { target: 'P1', field: 'maxVolumeStop', value },
+      words: ['Margin 1.3.'],
+      runs: 7,
+    });
     rerender(<FindingsPanel form="list" />);
     await userEvent.click(await screen.findByRole('button', { name: 'Try it as a new case' }));
     const { document, activeCase, overlays } = useDocument.getState();
@@ -115,14 +115,12 @@ describe('FindingsPanel', () => {
   });
   it('says when the setting has been tried already', () => {
     const tried = effectiveNumber(demoCircuit, second.id, 'P1', 'maxVolumeStop') as number;
-    useRuns
-      .getState()
-      .putRemedy(remedyKey(stall), {
-        found: true,
-        change: { target: 'P1', field: 'maxVolumeStop', value: tried * 1.1 },
-        words: [],
-        runs: 7,
-      });
+    useRuns.getState().putRemedy(remedyKey(stall), {
+      found: true,
+      change: { target: 'P1', field: 'maxVolumeStop', value: tried * 1.1 },
+      words: [],
+      runs: 7,
+    });
     render(<FindingsPanel form="list" />);
     expect(screen.getByRole('button', { name: 'Tried as case B' })).toBeVisible();
   });

@@ -55,8 +55,8 @@ export const ruleWords: Record<FindingRule, RuleWords> = {
     source: HOUSE,
   },
   'supply-out-of-band': {
-    equation: '|V/V_nameplate − 1| > 10 %',
-    assumptions: [],
+    equation: '|V/V_nameplate · f_nameplate/f − 1| > 10 %',
+    assumptions: ['The same volts per hertz give the same flux: 480 V at 60 Hz is as 400 V at 50 Hz.'],
     limits: 'Outside the band no nameplate rating applies; the supply is a licensed electrician’s job.',
     source: 'IEC 60034-1 voltage range',
   },
@@ -128,6 +128,18 @@ export const ruleWords: Record<FindingRule, RuleWords> = {
     assumptions: ['The compensator can only reduce the pump’s own flow.'],
     limits: 'Only the relief limits it, where there is one in reach.',
     source: 'force balance; common practice, no source',
+  },
+  'load-runs-away': {
+    equation: 'the rod moves over 20 mm/s for 0.15 s and 10 mm against its command, at centre, or with its driven side under −0.5 bar',
+    assumptions: ['Slower is leakage.'],
+    limits: 'Load-holding valves are not among the kinds yet.',
+    source: 'observed in the run; common practice, no source',
+  },
+  'does-not-destroke': {
+    equation: 'pump port > setting + the larger of 3 % and 5 bar for 0.3 s while the pump gives flow',
+    assumptions: ['Shorter is overshoot while the swash plate still moves.'],
+    limits: 'Case-drain pressure adds to the setting bar for bar.',
+    source: HOUSE,
   },
   'no-relief': {
     equation: 'no relief is reachable from the flow source through elements that cannot close in that direction',

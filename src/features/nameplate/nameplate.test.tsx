@@ -1,16 +1,18 @@
+import '@testing-library/jest-dom/vitest';
 import { act, render, screen, within } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
 import { beforeEach, describe, expect, it } from 'vitest';
 import { removeItems } from '#shared/circuit/edit/removal.ts';
 import { effectiveNumber } from '#shared/circuit/effective.ts';
 import { demoCircuit } from '#shared/circuit/samples/demo.ts';
+import type { CircuitCase } from '#shared/circuit/schema.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { useExplain } from '#src/stores/explain-store.ts';
 import { openNameplate, useNameplate } from '#src/stores/nameplate-store.ts';
 import { NameplateLayer } from './nameplate-layer.tsx';
 
 const CC = 1e-6 / (2 * Math.PI);
-const [first, second] = demoCircuit.cases as [{ id: string }, { id: string }];
+const [first, second] = demoCircuit.cases as [CircuitCase, CircuitCase];
 
 function open(target: string, caseId = first.id) {
   useDocument.getState().setActiveCase(caseId);

@@ -2,7 +2,7 @@ import { readFileSync } from 'node:fs';
 import { describe, expect, it } from 'vitest';
 import { verdictIds } from '#shared/findings/finding.ts';
 
-const css = readFileSync(new URL('./tokens.css', import.meta.url), 'utf8');
+const css = readFileSync(new URL('../../src/app/tokens.css', import.meta.url), 'utf8');
 
 function tokens(selector: string): Record<string, string> {
   const start = css.indexOf(`${selector} {`);
