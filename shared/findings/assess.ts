@@ -4,6 +4,7 @@ import { baseOf, type FindingContext, type SeenCircuit } from './context.ts';
 import { type Assessment, type Figure, type Finding, type Verdict, type VerdictId, verdictIds, verdictWords } from './finding.ts';
 import { figure } from './phrase.ts';
 import { checkRequirements, requirementRows } from './requirements.ts';
+import { destrokeRules } from './rules/destroke.ts';
 import { heatRules } from './rules/heat.ts';
 import { motorRules } from './rules/motor.ts';
 import { motorHeatRules } from './rules/motor-heat.ts';
@@ -13,6 +14,7 @@ import { pumpRules } from './rules/pump.ts';
 import { ratingRules } from './rules/ratings.ts';
 import { reliefRules } from './rules/relief.ts';
 import { rodRules } from './rules/rod.ts';
+import { runawayRules } from './rules/runaway.ts';
 import { slowerRules } from './rules/slower.ts';
 import { driveLoads } from './yardsticks.ts';
 
@@ -26,6 +28,8 @@ const rules = [
   ratingRules,
   protectionRules,
   pumpRules,
+  destrokeRules,
+  runawayRules,
   heatRules,
 ];
 
@@ -79,6 +83,7 @@ export function verdictOf(context: FindingContext, findings: readonly Finding[])
 
 function wordOf(id: VerdictId, finding: Finding): string {
   if (finding.rule === 'no-relief') return 'No relief protects a net';
+  if (finding.rule === 'load-runs-away') return 'Load runs back';
   return finding.rule === 'not-up-to-speed' ? 'Does not come up to speed' : verdictWords[id];
 }
 
@@ -88,6 +93,7 @@ function verdictFigure(context: FindingContext, id: VerdictId, finding: Finding)
   if (id === 'trips' && drive?.yardsticks.tripTime != null) return figure(drive.yardsticks.tripTime, 'time', { digits: 0 });
   if (id === 'relief-passing' && finding.at) return figure(finding.at.flow, 'flow');
   if (id === 'over' && drive) return figure(drive.yardsticks.rmsCurrent, 'fraction', { digits: 0 });
-  if (id === 'rod-stops-short') return finding.headline.find((part): part is Figure => typeof part !== 'string') ?? null;
+  if (id === 'rod-stops-short' && finding.rule === 'rod-stops-short')
+    return finding.headline.find((part): part is Figure => typeof part !== 'string') ?? null;
   return id === 'failed' ? figure(context.run.time, 'time', { digits: 1 }) : null;
 }

@@ -62,6 +62,8 @@ export type FindingRule =
   | 'intensification'
   | 'hunting'
   | 'load-above-compensator'
+  | 'load-runs-away'
+  | 'does-not-destroke'
   | 'no-relief'
   | 'load-drives-pump'
   | 'pressure-left'

@@ -36,7 +36,7 @@ export const liftStarter = sample({
     }),
     part('V3', 'directional-valve-4-3', [69, 18], valve('closed')),
     part('V4', 'throttle', [82, 8], {
-      opening: percent(30),
+      opening: percent(15),
       ratedFlow: litres(60),
       ratedDrop: bar(6),
     }),
@@ -83,14 +83,14 @@ export const liftStarter = sample({
   ],
   shafts: [shaftOf('shaft1', 'M1.shaft', 'P1.shaft')],
   duty: {
-    duration: 10,
+    duration: 14,
     repeat: true,
     commands: [
       flag('start', 0, 'Start', 'M1.contactor', 1),
       flag('lift', 0.6, 'Solenoid a on', 'V3.spool', 1, 0.05),
       flag('wait', 5.2, 'Centre', 'V3.spool', 0, 0.05),
       flag('lower', 6, 'Solenoid b on', 'V3.spool', -1, 0.05),
-      flag('rest', 9.6, 'Centre', 'V3.spool', 0, 0.05),
+      flag('rest', 8.8, 'Centre', 'V3.spool', 0, 0.05),
     ],
   },
   requirements: [

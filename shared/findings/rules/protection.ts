@@ -101,7 +101,7 @@ function unprotectedChambers(context: FindingContext): Finding[] {
 /** Turning back this fast counts [rad/s]. */
 const BACKWARDS = 2;
 /** …and this far [rad]: oil pressed together between pump and check valve springs the shaft back by less. */
-const HALF_A_TURN = Math.PI;
+const A_TURN = 2 * Math.PI;
 
 function backwards(context: FindingContext): Finding[] {
   return context.drives.flatMap((drive) => {
@@ -112,7 +112,7 @@ function backwards(context: FindingContext): Finding[] {
     if (!speed) return [];
     // A motor that itself pulls backwards (two leads exchanged) is no load that drives.
     const stretch = stretches(context.times, (i) => -speed[i]! - BACKWARDS, 0.02).find(
-      (window) => -integrate(context.times, speed, window) >= HALF_A_TURN && !(torque && drivenBackwards(context, drive, torque, window)),
+      (window) => -integrate(context.times, speed, window) >= A_TURN && !(torque && drivenBackwards(context, drive, torque, window)),
     );
     if (!stretch) return [];
     const worst = lowest(context.times, speed, stretch);

@@ -1,7 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { demoCircuit } from '#shared/circuit/samples/demo.ts';
 import { find, rulesOf, values, words } from '#tests/support/finding-words.ts';
-import { assess, bar, changed } from '#tests/support/synthetic-run.ts';
+import { assess, bar, changed, cubic } from '#tests/support/synthetic-run.ts';
 
 describe('ratings and protection', () => {
   it('a pressure above a plate’s rating is a trial', () => {
@@ -102,6 +102,55 @@ describe('ratings and protection', () => {
   });
 });
 
+describe('rods that the load moves', () => {
+  const up = { 'V3.spool': (t: number) => (t > 0.6 && t < 5 ? 1 : 0), 'A1.A.pressure': 3 * bar };
+  it('against the command: the load runs back, whatever the motor says', () => {
+    const result = assess({ channels: { ...up, 'A1.velocity': (t) => (t > 3 && t < 4 ? -0.3 : 0.1) } });
+    expect(result.verdict).toMatchObject({ id: 'rod-stops-short', word: 'Load runs back' });
+    const finding = find(result, 'load-runs-away');
+    expect(values(finding.cause)[0]).toBeCloseTo(0.3, 1);
+    expect(finding.caution).toContain('does not hold a load');
+  });
+
+  it('at centre: said, with the caution; leakage is not', () => {
+    const drop = (speed: number) => assess({ channels: { ...up, 'A1.velocity': (t) => (t > 5.5 && t < 7 ? -speed : 0) } });
+    expect(words(find(drop(0.4), 'load-runs-away').headline)).toContain('with the valve at centre');
+    expect(rulesOf(drop(0.002))).not.toContain('load-runs-away');
+  });
+
+  it('ahead of the oil: the driven side is drawn apart', () => {
+    const pulled = { ...up, 'A1.velocity': (t: number) => (t > 2 && t < 3 ? 0.8 : 0), 'A1.A.pressure': -0.9 * bar };
+    const finding = find(assess({ channels: pulled }), 'load-runs-away');
+    expect(values(finding.cause)).toEqual([0.8, -0.9 * bar]);
+    expect(rulesOf(assess({ channels: { ...pulled, 'A1.A.pressure': 2 * bar } }))).not.toContain('load-runs-away');
+  });
+});
+
+describe('a pump above its setting', () => {
+  const above = (t: number) => (t > 3 && t < 5 ? 206 : 100) * bar;
+  it('that still gives flow does not go off stroke: something sticks', () => {
+    const finding = find(assess({ channels: { 'P1.outlet.pressure': above } }), 'does-not-destroke');
+    expect(values(finding.cause).slice(0, 2)).toEqual([expect.closeTo(206 * bar, -5), 190 * bar]);
+    expect(words(finding.remedy!.words)).toContain('swash plate sticks');
+  });
+
+  it('is told from a minimum stop wound in and from a blocked case line', () => {
+    const wound = find(
+      assess({ document: changed({ 'P1.minVolumeStop': 6 * cubic }), channels: { 'P1.outlet.pressure': above } }),
+      'does-not-destroke',
+    );
+    expect(words(wound.remedy!.words)).toContain('minimum volume stop');
+    const blocked = find(assess({ channels: { 'P1.outlet.pressure': above, 'P1.drain.pressure': 14 * bar } }), 'does-not-destroke');
+    expect(words(blocked.cause)).toContain('bar for bar');
+  });
+
+  it('for a moment, or with no flow of its own, is no fault', () => {
+    const spike = (t: number) => (t > 3 && t < 3.1 ? 206 : 100) * bar;
+    expect(rulesOf(assess({ channels: { 'P1.outlet.pressure': spike } }))).not.toContain('does-not-destroke');
+    expect(rulesOf(assess({ channels: { 'P1.outlet.pressure': above, 'P1.flow': 0 } }))).not.toContain('does-not-destroke');
+  });
+});
+
 describe('pump, heat, outcome', () => {
   it('an inlet under 0.8 bar absolute warns; loss of filling starves', () => {
     expect(find(assess({ channels: { 'P1.suctionPressure': 0.7 * bar } }), 'inlet-starving').severity).toBe(2);
@@ -140,7 +189,7 @@ describe('pump, heat, outcome', () => {
 
   it('a missed requirement is a finding of its own', () => {
     const slow = (t: number) => Math.min(53e3, t > 5 ? 53e3 : 1e3);
-    const result = assess({ channels: { 'A1.loadForce': slow, 'A1.velocity': 0.05 } });
+    const result = assess({ channels: { 'A1.loadForce': slow, 'A1.velocity': (t) => (t > 0.6 && t < 5.6 ? 0.05 : 0) } });
     expect(find(result, 'requirement').id).toBe('requirement:bale-time');
     expect(words(find(result, 'within-limits').headline)).toContain('the job asked for is not done');
     expect(result.requirements.find((entry) => entry.id === 'bale-time')).toMatchObject({ met: false });
