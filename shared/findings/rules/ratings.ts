@@ -116,11 +116,13 @@ function intensified(context: FindingContext, cylinder: Component): Finding[] {
   const stretch = stretches(context.times, (i) => Math.min(rod[i]! - 1.05 * Math.max(supplied, cap[i]!), cap[i]! - 5e5), SUSTAINED)[0];
   if (!stretch) return [];
   const peak = highest(context.times, rod, stretch);
+  // Under what the compensator may bring there anyway it is how a throttled rod side works: a note.
+  const deadHead = Math.max(0, ...feedingPumps(context, id).map((pump) => context.plate(pump).number('compensatorPressure')));
   return [
     {
       id: `intensification:${id}`,
       rule: 'intensification',
-      severity: 1,
+      severity: peak.value > deadHead ? 1 : 3,
       caseId: context.caseId,
       component: id,
       time: peak.time,

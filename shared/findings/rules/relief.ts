@@ -46,6 +46,8 @@ function passes(context: FindingContext, relief: Component, pump: Component | un
   // Oil that crosses well under the pressure at which the valve should be shut again: the valve, not a setting.
   const stuck = drop < 0.95 * reseat;
   const hidden = !stuck && pump !== undefined && cracks <= deadHead;
+  // A peak opened it, and dead-head lies above the pressure at which it closes again.
+  const unseated = !stuck && !hidden && pump !== undefined && drop < cracks && drop <= 1.02 * deadHead;
   return [
     {
       id: `relief-passing:${relief.id}`,
@@ -72,7 +74,17 @@ function passes(context: FindingContext, relief: Component, pump: Component | un
           ? say('It should crack at ', pressure(cracks), ' and be shut again at ', pressure(reseat), '.')
           : hidden
             ? say('It opens at ', pressure(cracks), '; the compensator would go to zero flow only at ', pressure(deadHead), '.')
-            : 'The pump does not go off stroke before the relief opens.',
+            : unseated
+              ? say(
+                  'A peak opened it at ',
+                  pressure(cracks),
+                  '; it closes again only at ',
+                  pressure(reseat),
+                  ', and the compensator keeps the line at ',
+                  pressure(deadHead),
+                  '.',
+                )
+              : 'The pump does not go off stroke before the relief opens.',
       ),
       remedy:
         hidden && pump
@@ -81,17 +93,25 @@ function passes(context: FindingContext, relief: Component, pump: Component | un
               pump.id,
               say('Turn the compensator down until it works before the relief. A higher relief is not a cure.'),
             )
-          : stuck
-            ? {
-                words: say(
-                  'Have the relief taken out and looked at: dirt under the seat, a broken spring. Turning its screw does not cure it.',
+          : unseated && pump
+            ? compensatorDown(
+                context,
+                pump.id,
+                say(
+                  'Turn the compensator down until dead-head lies under the pressure at which the relief closes. A higher relief is not a cure.',
                 ),
-              }
-            : {
-                words: say(
-                  'Find why the pump does not go off stroke: compensator, its pilot line, a stuck swash plate, or a minimum stop wound in.',
-                ),
-              },
+              )
+            : stuck
+              ? {
+                  words: say(
+                    'Have the relief taken out and looked at: dirt under the seat, a broken spring. Turning its screw does not cure it.',
+                  ),
+                }
+              : {
+                  words: say(
+                    'Find why the pump does not go off stroke: compensator, its pilot line, a stuck swash plate, or a minimum stop wound in.',
+                  ),
+                },
       caution: HELD_RELIEF,
       at: { pressure: drop, flow: amount },
     },

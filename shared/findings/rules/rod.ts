@@ -85,7 +85,10 @@ function stopsShort(context: FindingContext, cylinder: Component): Finding[] {
 
 function finding(context: FindingContext, id: string, window: Window, needed: number | null, side: 'A' | 'B'): Finding {
   const load = context.column(`${id}.loadForce`);
-  const available = load ? mean(context.times, load, window) : 0;
+  const asked = load ? mean(context.times, load, window) : 0;
+  const output = context.column(`${id}.force`);
+  // A load that rests on the end of the stroke asks for more than the rod pushes.
+  const available = output && side === 'A' ? Math.min(asked, Math.max(0, mean(context.times, output, window))) : asked;
   const at = (window.from + window.to) / 2;
   const driven = context.at(`${id}.${side}.pressure`, at);
   const place = Math.max(0, context.at(`${id}.position`, at));
@@ -125,7 +128,11 @@ function finding(context: FindingContext, id: string, window: Window, needed: nu
       pressure(driven, `${id}.${side}.pressure`),
       side === 'A' ? ' on the cap side. It pushes ' : ' on the rod side. It pushes ',
       force(available, `${id}.loadForce`),
-      needed === null ? '.' : say('; ', force(needed), ' is needed.'),
+      needed !== null
+        ? say('; ', force(needed), ' is needed.')
+        : asked > 1.01 * available
+          ? say('; the load asks for ', force(asked), '.')
+          : '.',
       limit,
     ),
     remedy: relief

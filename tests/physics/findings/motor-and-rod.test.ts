@@ -195,6 +195,17 @@ describe('relief', () => {
     expect(rulesOf(short)).not.toContain('relief-passing');
   });
 
+  it('that a peak opened and dead-head keeps open is cured by a compensator under its reseat', () => {
+    const open = { 'V2.flow': (t: number) => (t > 2 && t < 5 ? 4 * litresPerMinute : 0), 'V2.P.pressure': 189 * bar };
+    const finding = find(
+      assess({ document: changed({ 'V2.setPressure': 205 * bar, 'V2.reseat': 0.9 }), channels: open }),
+      'relief-passing',
+    );
+    expect(words(finding.cause)).toContain('closes again only at');
+    expect(finding.remedy?.seek).toMatchObject({ target: 'P1', field: 'compensatorPressure', want: 'largest' });
+    expect(words(finding.remedy!.words)).toContain('A higher relief is not a cure');
+  });
+
   it('that passes oil well under its reseat pressure is stuck open: the valve, not a setting', () => {
     const finding = find(assess({ channels: { 'V2.flow': 20 * litresPerMinute, 'V2.P.pressure': 20 * bar } }), 'relief-passing');
     expect(words(finding.cause)).toContain('It should crack at');
@@ -240,6 +251,14 @@ describe('rod', () => {
     const seek = find(result, 'rod-stops-short').remedy?.seek;
     expect(seek).toMatchObject({ target: 'P1', field: 'compensatorPressure', want: 'smallest', low: 125 * bar });
     expect(seek!.high).toBeCloseTo((215 * bar) / 1.054 - 10 * bar, 0);
+  });
+
+  it('under a load that rests on its end is said to push what it pushes, not what the load asks', () => {
+    const heavy = { ...stuck, 'A1.position': 0, 'A1.loadForce': 80e3, 'A1.force': 59e3, 'P1.outlet.pressure': 189 * bar };
+    const document = changed({ 'A1.workForce': 0 });
+    const finding = find(assess({ document: { ...document, requirements: [] }, channels: heavy }), 'rod-stops-short');
+    expect(values(finding.cause)).toEqual(expect.arrayContaining([expect.closeTo(59e3, 0), expect.closeTo(80e3, 0)]));
+    expect(words(finding.cause)).toContain('the load asks for');
   });
 
   it('that never moves because the pump gives nothing stops short; no screw is offered', () => {

@@ -56,6 +56,12 @@ describe('ratings and protection', () => {
       'intensification',
     );
     expect(values(finding.cause)[2]).toBeCloseTo(63 ** 2 / (63 ** 2 - 36 ** 2), 3);
+    expect(finding.severity).toBe(1);
+  });
+
+  it('rod-side pressure of an ordinary throttled return, under dead-head, is a note', () => {
+    const low = { 'A1.A.pressure': 60 * bar, 'A1.B.pressure': 110 * bar, 'P1.outlet.pressure': 61 * bar };
+    expect(find(assess({ channels: low }), 'intensification').severity).toBe(3);
   });
 
   it('an external load above the compensator: only the relief limits it', () => {
