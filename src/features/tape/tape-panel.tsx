@@ -26,6 +26,9 @@ import { usePlayback } from './use-playback.ts';
 import { useTape } from './use-tape.ts';
 import { useTapeKeys } from './use-tape-keys.ts';
 import './tape.css';
+import './tape-band.css';
+import './tape-lanes.css';
+import './tape-sheets.css';
 
 /** Gives the focus back to a flag once its sheet is gone. */
 function focusFlag(id: string) {
