@@ -18,7 +18,7 @@ import { useDocument } from '#src/stores/document-store.ts';
 import { openNameplate } from '#src/stores/nameplate-store.ts';
 import { benchNodeTypes } from './bench-nodes.tsx';
 import { FlowList, SpokenList } from './flow-list.tsx';
-import { InkKey, KEY_HEIGHT, KEY_WIDTH } from './ink-key.tsx';
+import { InkKey, KEY_HEIGHT, KEY_WIDTH, MomentLine, PLAIN_KEY_HEIGHT } from './ink-key.tsx';
 import { LineReading } from './line-reading.tsx';
 import { steadyNodes } from './steady.ts';
 import { TurnWheel, WHEEL_HEIGHT, WHEEL_WIDTH } from './turn-wheel.tsx';
@@ -49,18 +49,20 @@ function Drawing({ onOpen }: Required<BenchDrawingProps>) {
   const inHand = useDocument((state) => state.inHand);
   const [ref, size] = useSize<HTMLDivElement>();
   const [zoom, setZoom] = useState<number | null>(null);
-  const wheelBeside = inHand !== null && !phone && (touch || layout !== 'desk');
+  // The wheel's place is kept free all the time, so that nothing moves when a screw is taken in hand.
+  const wheelBeside = !phone && (touch || layout !== 'desk');
   const bench = useBenchLayout(document, activeCase, {
     width: size.width,
     height: size.height,
     zoom,
     touch,
     inHand,
-    key: phone ? null : { width: KEY_WIDTH + 26, height: KEY_HEIGHT + 14 },
-    wheel: wheelBeside ? { width: WHEEL_WIDTH + 24, height: WHEEL_HEIGHT + 20 } : null,
+    key: phone ? null : { width: KEY_WIDTH + 26, height: (wheelBeside ? PLAIN_KEY_HEIGHT : KEY_HEIGHT) + 14 },
+    wheel: wheelBeside ? { width: WHEEL_WIDTH + 18, height: WHEEL_HEIGHT + 6 } : null,
     buttons: phone ? noRoom : buttonRoom(touch),
   });
-  const wheelBelow = inHand !== null && (phone || (wheelBeside && bench.wheelCorner === null));
+  const wheelBelow = inHand !== null && (phone || (wheelBeside && bench.wheelPlace === null));
+
   const tag = bench.tags.find((entry) => entry.spec.address === inHand);
   const buttons = <ZoomButtons zoom={zoom} touch={touch} width={size.width} height={size.height} onZoom={setZoom} />;
   return (
@@ -84,13 +86,13 @@ function Drawing({ onOpen }: Required<BenchDrawingProps>) {
         />
         {!phone && buttons}
         {!phone && (
-          <div className={`bench-panel bench-panel-${bench.keyCorner ?? 'top-left'}`}>
-            <InkKey />
+          <div className="bench-panel" style={bench.keyPlace ?? undefined}>
+            <InkKey plain={wheelBeside} />
           </div>
         )}
-        {tag && wheelBeside && bench.wheelCorner && (
-          <div className={`bench-panel bench-panel-${bench.wheelCorner}`}>
-            <TurnWheel spec={tag.spec} state={tag.state} />
+        {wheelBeside && bench.wheelPlace && (
+          <div className="bench-panel bench-panel-wheel" style={bench.wheelPlace}>
+            {tag ? <TurnWheel spec={tag.spec} state={tag.state} /> : <MomentLine />}
           </div>
         )}
         {document.components.length === 0 && (
@@ -140,6 +142,7 @@ function Flow({ bench, width, height, zoom, touch, besideWheel, onZoom, onOpen }
   opened.current = onOpen;
   const open = useCallback((id: string) => opened.current(id), []);
 
+  const pressedSheet = useRef(false);
   const formerPlaces = useRef<readonly TagPlace[]>([]);
   const samePlaces = (next: readonly TagPlace[]) => {
     const before = formerPlaces.current;
@@ -231,7 +234,12 @@ function Flow({ bench, width, height, zoom, touch, besideWheel, onZoom, onOpen }
       onNodesChange={follow}
       onNodeDragStop={drop}
       onMoveEnd={moved}
-      onPaneClick={() => useDocument.getState().takeInHand(null)}
+      onPointerDownCapture={(event) => {
+        pressedSheet.current = !(event.target as Element).closest('.react-flow__node');
+      }}
+      onPaneClick={() => {
+        if (pressedSheet.current) useDocument.getState().takeInHand(null);
+      }}
       minZoom={LEAST_ZOOM}
       maxZoom={MOST_ZOOM}
       nodesConnectable={false}

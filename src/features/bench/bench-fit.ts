@@ -7,7 +7,11 @@ import type { ReadingSpec } from './reading-specs.ts';
 
 /** How the whole drawing is fitted into its region: as large as may be, with room for its tags, its readings and the key. */
 
-export type Corner = 'top-left' | 'bottom-left' | 'bottom-right' | 'top-right';
+/** Left-top corner of a panel in its region [px]. */
+export interface PanelPlace {
+  readonly left: number;
+  readonly top: number;
+}
 export interface Size {
   readonly width: number;
   readonly height: number;
@@ -29,42 +33,55 @@ export interface FitRequest {
 
 export interface Fit {
   readonly view: View;
-  /** null = no corner is free: the key then stands at the top left, above the drawing. */
-  readonly keyCorner: Corner | null;
-  readonly wheelCorner: Corner | null;
+  /** null = there is no free place. */
+  readonly keyPlace: PanelPlace | null;
+  readonly wheelPlace: PanelPlace | null;
   readonly blocked: readonly Box[];
 }
 
 /** Room around the drawing that is tried [modules at full size]. */
 const rooms = [2, 3, 4, 5.5, 7] as const;
 const MOST_ZOOM = 1.35;
-const corners: readonly Corner[] = ['top-left', 'bottom-left', 'bottom-right', 'top-right'];
 
-function cornerBox(corner: Corner, view: View, size: Size, panel: Size): Box {
+function panelBox(place: PanelPlace, view: View, panel: Size): Box {
   const unit = 10 * view.zoom;
-  const x = corner.endsWith('left') ? view.left : view.left + (size.width - panel.width) / unit;
-  const y = corner.startsWith('top') ? view.top : view.top + (size.height - panel.height) / unit;
-  return { x, y, w: panel.width / unit, h: panel.height / unit };
+  return { x: view.left + place.left / unit, y: view.top + place.top / unit, w: panel.width / unit, h: panel.height / unit };
 }
 
-function freeCorner(request: FitRequest, view: View, panel: Size, taken: readonly Box[]): Corner | null {
+/** Places along the edge of the region: top left, along the bottom, then the rest. */
+function edgePlaces(size: Size, panel: Size): PanelPlace[] {
+  const right = size.width - panel.width;
+  const bottom = size.height - panel.height;
+  const places: PanelPlace[] = [
+    { left: 0, top: 0 },
+    { left: 0, top: bottom },
+  ];
+  for (let left = 20; left < right; left += 20) places.push({ left, top: bottom });
+  places.push({ left: right, top: bottom }, { left: right, top: 0 });
+  for (let left = 20; left < right; left += 20) places.push({ left, top: 0 });
+  for (let top = 20; top < bottom; top += 20) places.push({ left: 0, top });
+  return places;
+}
+
+function freeEdge(request: FitRequest, view: View, panel: Size, taken: readonly Box[]): PanelPlace | null {
   const { bodies, legs, size } = request;
   const covered = [...[...bodies.byComponent.values()].flat(), ...bodies.words, ...taken];
-  for (const corner of corners) {
-    const box = cornerBox(corner, view, size, panel);
-    if (!covered.some((other) => overlaps(box, other)) && !legs.some((leg) => legMeets(leg.a, leg.b, box))) return corner;
+  for (const place of edgePlaces(size, panel)) {
+    const box = panelBox(place, view, panel);
+    if (!covered.some((other) => overlaps(box, other)) && !legs.some((leg) => legMeets(leg.a, leg.b, box))) return place;
   }
   return null;
 }
 
 function panelsIn(request: FitRequest, view: View): Fit {
   const { size, key, wheel, buttons } = request;
-  const bottomRight = cornerBox('bottom-right', view, size, buttons);
-  const keyCorner = key ? freeCorner(request, view, key, [bottomRight]) : null;
-  const blocked = key && keyCorner ? [bottomRight, cornerBox(keyCorner, view, size, key)] : [bottomRight];
-  const wheelCorner = wheel ? freeCorner(request, view, wheel, blocked) : null;
-  if (wheel && wheelCorner) blocked.push(cornerBox(wheelCorner, view, size, wheel));
-  return { view, keyCorner, wheelCorner, blocked };
+  const corner = { left: size.width - buttons.width, top: size.height - buttons.height };
+  const blocked = [panelBox(corner, view, buttons)];
+  const wheelPlace = wheel ? freeEdge(request, view, wheel, blocked) : null;
+  if (wheel && wheelPlace) blocked.push(panelBox(wheelPlace, view, wheel));
+  const keyPlace = key ? freeEdge(request, view, key, blocked) : null;
+  if (key && keyPlace) blocked.push(panelBox(keyPlace, view, key));
+  return { view, keyPlace, wheelPlace, blocked };
 }
 
 /** What is wrong with a view: tags that shrink or cover something, readings without a place, a key without a corner. */
@@ -80,7 +97,7 @@ function faults(request: FitRequest, fit: Fit): number {
     if (!place?.free) count += 2;
     else if (place.form !== form) count += form === 'full' ? 2 : 1;
   }
-  return count + (request.key && !fit.keyCorner ? 2 : 0);
+  return count + (request.key && !fit.keyPlace ? 2 : 0) + (request.wheel && !fit.wheelPlace ? 2 : 0);
 }
 
 /** The largest view in which everything finds its place; where none does, the one with the fewest faults. */

@@ -14,6 +14,8 @@ const HEIGHT = 16;
 const ABOVE = 22;
 export const KEY_WIDTH = RUNG * 5 + ABOVE + 26;
 export const KEY_HEIGHT = 72;
+/** Without the line above it. */
+export const PLAIN_KEY_HEIGHT = 48;
 
 /** Address of the pressure the pointer shows: the first port that feeds a net, else the first gauge. */
 function keyAddress(document: CircuitDocument): string | null {
@@ -25,22 +27,39 @@ function keyAddress(document: CircuitDocument): string | null {
   return gauge ? `${gauge.id}.M.pressure` : null;
 }
 
+/** "Solenoid a on" → "solenoid a on", but "V3 to a" stays. */
+function inSentence(label: string): string {
+  return /^\p{Lu}\p{Ll}/u.test(label) ? label.charAt(0).toLowerCase() + label.slice(1) : label;
+}
+
+/** "At 3.34 s, case B, solenoid a on". */
+export const MomentLine = memo(function MomentLine() {
+  const format = useFormat();
+  const ink = useDocument((state) => findCase(state.document, state.activeCase)?.ink ?? 0);
+  const words = useRef<HTMLSpanElement>(null);
+  const when = useRef<HTMLElement>(null);
+  useMoment(({ time, run }: Moment) => {
+    if (when.current) when.current.textContent = `At ${format.quantity(time, 'time', { digits: 2 }).text}`;
+    if (!words.current) return;
+    const phase = run?.phases.find((entry) => time >= entry.from && time < entry.to)?.label;
+    words.current.textContent = `case ${caseLetter(ink)}${phase ? `, ${inSentence(phase)}` : ''}`;
+  });
+  return (
+    <p className="ink-key-line">
+      <strong ref={when} /> <span ref={words} />
+    </p>
+  );
+});
+
 /** The line above the drawing and the ladder of the pressure ink, with a pointer at the present pressure. */
 export const InkKey = memo(function InkKey({ plain }: { readonly plain?: boolean }) {
   const format = useFormat();
   const address = useDocument((state) => keyAddress(state.document));
   const ink = useDocument((state) => findCase(state.document, state.activeCase)?.ink ?? 0);
   const inkScale = useRuns((state) => state.inkScale);
-  const words = useRef<HTMLSpanElement>(null);
-  const when = useRef<HTMLElement>(null);
   const pointer = useRef<SVGPathElement>(null);
 
-  useMoment(({ time, run, at, inkScale: scale }: Moment) => {
-    if (when.current) when.current.textContent = `At ${format.quantity(time, 'time', { digits: 2 }).text}`;
-    if (words.current) {
-      const phase = run?.phases.find((entry) => time >= entry.from && time < entry.to)?.label;
-      words.current.textContent = `case ${caseLetter(ink)}${phase ? `, ${phase.charAt(0).toLowerCase()}${phase.slice(1)}` : ''}`;
-    }
+  useMoment(({ at, inkScale: scale }: Moment) => {
     const pressure = address ? at(address) : undefined;
     if (pointer.current) {
       const share = Math.min(1.1, Math.max(0, pressure ?? 0) / scale);
@@ -52,11 +71,7 @@ export const InkKey = memo(function InkKey({ plain }: { readonly plain?: boolean
   const marks = [0, 0.2, 0.4, 0.6, 0.8, 1].map((share) => ({ share, label: format.quantity(share * inkScale, 'pressure') }));
   return (
     <div className="ink-key">
-      {!plain && (
-        <p className="ink-key-line">
-          <strong ref={when} /> <span ref={words} />
-        </p>
-      )}
+      {!plain && <MomentLine />}
       <svg
         width={KEY_WIDTH}
         height={48}

@@ -18,8 +18,8 @@ export interface TurnWheelProps {
   readonly wide?: boolean;
 }
 
-export const WHEEL_WIDTH = 452;
-export const WHEEL_HEIGHT = 128;
+export const WHEEL_WIDTH = 404;
+export const WHEEL_HEIGHT = 122;
 /** Pixels of the knurled bar for one turn. */
 const TURN = 120;
 const BAR = 290;
@@ -52,7 +52,7 @@ export function TurnWheel({ spec, state, wide }: TurnWheelProps) {
       <div className="turn-wheel-head">
         <span className="turn-wheel-name">
           <strong>{spec.label}</strong>
-          {!wide && ' in hand, quarter turns'}
+          {!wide && ' in hand'}
         </span>
         {typing === null ? (
           <button type="button" className="turn-wheel-value" aria-label={`${value.text}. Type a value`} onClick={() => setTyping('')}>

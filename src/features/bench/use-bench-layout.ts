@@ -6,7 +6,7 @@ import type { TagForm, TagPlace } from '#shared/pictures/tag-slots.ts';
 import type { Box } from '#shared/symbols/place.ts';
 import { useRoutes } from '#src/components/schematic/use-routes.ts';
 import { useFormat } from '#src/components/use-format.ts';
-import { type Corner, chooseFit } from './bench-fit.ts';
+import { chooseFit, type PanelPlace } from './bench-fit.ts';
 import { bodiesOf, growth, legsOf, placeReadings, seatTags, type View, visibleBox } from './bench-layout.ts';
 import { keepPlaces } from './bench-places.ts';
 import { type ReadingSpec, readingSpecs } from './reading-specs.ts';
@@ -18,8 +18,8 @@ export interface BenchLayout {
   readonly routes: ReadonlyMap<string, RoutedLine>;
   readonly fit: View;
   /** Where the key of the pressure ink stands; null = no room beside the drawing. */
-  readonly keyCorner: Corner | null;
-  readonly wheelCorner: Corner | null;
+  readonly keyPlace: PanelPlace | null;
+  readonly wheelPlace: PanelPlace | null;
   readonly grow: number;
   readonly small: boolean;
   readonly readings: readonly { readonly spec: ReadingSpec; readonly box: Box }[];
@@ -133,8 +133,8 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
   return {
     routes,
     fit: fit.view,
-    keyCorner: fit.keyCorner,
-    wheelCorner: fit.wheelCorner,
+    keyPlace: fit.keyPlace,
+    wheelPlace: fit.wheelPlace,
     grow,
     small,
     readings: sheet.readings.flatMap((spec) => {
