@@ -1,10 +1,10 @@
 import type { ReactFlowInstance } from 'reactflow';
 import type { CircuitDocument } from '#shared/circuit/schema.ts';
-import { routeLines } from '#shared/pictures/route.ts';
 import { schematicBounds } from '#shared/pictures/schematic-shapes.ts';
 import { symbolValues } from '#shared/pictures/symbol-values.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { MODULE } from './flow-model.ts';
+import { drawnRoutes } from './sheet-routes.ts';
 
 const MARGIN = 3;
 const LEAST = 0.25;
@@ -14,7 +14,7 @@ const SLIP = { w: 25, h: 8 };
 
 /** Everything on the sheet with its loads and lines, in modules; null for an empty one. */
 export function sheetBounds(document: CircuitDocument, caseId: string) {
-  const drawn = schematicBounds(document, (component) => symbolValues(document, caseId, component), routeLines(document));
+  const drawn = schematicBounds(document, (component) => symbolValues(document, caseId, component), drawnRoutes());
   const slips = [...document.notes, ...document.labels].map((slip) => ({ x: slip.at.x, y: slip.at.y, ...SLIP }));
   const boxes = drawn ? [drawn, ...slips] : slips;
   if (boxes.length === 0) return null;

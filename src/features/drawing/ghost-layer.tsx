@@ -3,7 +3,6 @@ import { EdgeLabelRenderer, useViewport } from 'reactflow';
 import { growFrom } from '#shared/circuit/edit/grow.ts';
 import type { CircuitDocument } from '#shared/circuit/schema.ts';
 import { endOf } from '#shared/pictures/line-ends.ts';
-import { routeLines } from '#shared/pictures/route.ts';
 import { joinedPorts } from '#shared/pictures/schematic-shapes.ts';
 import { shaftPath, shaftShapes } from '#shared/pictures/shaft-shapes.ts';
 import { symbolValues } from '#shared/pictures/symbol-values.ts';
@@ -18,6 +17,7 @@ import { branchPoint } from './branch-point.ts';
 import { useDrawing } from './drawing-store.ts';
 import { MODULE } from './flow-model.ts';
 import { cureGhosts, useDrawingProblems } from './problems.ts';
+import { routesAfter } from './sheet-routes.ts';
 
 const none: ReadonlySet<string> = new Set();
 
@@ -91,7 +91,7 @@ function Ghost({ before, after, words, focus, dotted }: GhostProps) {
 function added(before: CircuitDocument, after: CircuitDocument) {
   const had = new Set([...before.components, ...before.lines].map((entry) => entry.id));
   const parts = after.components.filter((part) => !had.has(part.id));
-  const routes = routeLines(after);
+  const routes = routesAfter(after);
   const lines = after.lines.flatMap((line) => {
     const route = routes.get(line.id);
     return had.has(line.id) || !route ? [] : [{ line, route }];

@@ -13,7 +13,6 @@ import ReactFlow, {
 import { joinProblem } from '#shared/circuit/edit/joins.ts';
 import { symbolSize } from '#shared/circuit/kind-lookup.ts';
 import type { PortRef } from '#shared/circuit/schema.ts';
-import { useRoutes } from '#src/components/schematic/use-routes.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { openNameplate } from '#src/stores/nameplate-store.ts';
 import { joinPorts, joinToLine, placePart } from './actions.ts';
@@ -26,6 +25,7 @@ import { nearestOnLine } from './line-point.ts';
 import { LabelNode, NoteNode } from './paper-nodes.tsx';
 import { PartNode } from './part-node.tsx';
 import { applyMoves, applySelection } from './sheet-changes.ts';
+import { useSheetRoutes } from './sheet-routes.ts';
 
 const nodeTypes = { part: PartNode, note: NoteNode, label: LabelNode };
 const edgeTypes = { line: LineEdge, shaft: ShaftEdge };
@@ -39,7 +39,8 @@ export function Sheet() {
   const document = useDocument((state) => state.document);
   const selection = useDocument((state) => state.selection);
   const placing = useDrawing((state) => state.placing);
-  const routes = useRoutes(document);
+  const dragging = useDocument((state) => state.gesture !== null);
+  const routes = useSheetRoutes(document, dragging);
   const maker = useRef(nodeMaker());
   const nodes = useMemo(() => maker.current(document, selection), [document, selection]);
   const edges = useMemo(() => edgesOf(document, routes, selection), [document, routes, selection]);
