@@ -103,8 +103,12 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
     return found;
   }, [specs, document, caseId, inHand, small, format]);
 
-  const kept = useRef<{ text: string; sheet: unknown; readings: unknown; places: ReadonlyMap<string, TagPlace> } | null>(null);
-  const text = `${grow} ${touch} ${JSON.stringify(frame)} ${states
+  const kept = useRef<{ text: string; sheet: unknown; readings: unknown; view: string; places: ReadonlyMap<string, TagPlace> } | null>(
+    null,
+  );
+  // In another view tags are seated anew; in the same one they stay.
+  const view = `${grow} ${touch} ${JSON.stringify(frame)}`;
+  const text = `${view} ${states
     .map(({ spec, form, chip }) => {
       const dragged = document.tagPlaces[spec.address];
       return `${spec.address}:${form}:${form === 'chip' ? chip.length : ''}:${inHand === spec.address}:${dragged ? `${dragged.dx},${dragged.dy}` : ''}`;
@@ -113,7 +117,7 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
   const places = useMemo(() => {
     const before = kept.current;
     if (before && before.text === text && before.sheet === sheet && before.readings === readings) return before.places;
-    const steady = before && before.sheet === sheet ? before.places : null;
+    const steady = before && before.sheet === sheet && before.view === view ? before.places : null;
     const wishes = states.map(({ spec, form, chip }) => ({ spec, form, chipText: chip, inHand: inHand === spec.address }));
     const next = seatTags(
       wishes,
@@ -124,7 +128,7 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
       { grow, touch, frame, blocked, wheel: options.wheel !== null },
       steady,
     );
-    kept.current = { text, sheet, readings, places: next };
+    kept.current = { text, sheet, readings, view, places: next };
     keepPlaces(next);
     return next;
     // `text` stands for all that decides where a tag stands.
