@@ -1,4 +1,5 @@
 import { createBrowserRouter } from 'react-router-dom';
+import { loadPatiently } from '#src/components/later.ts';
 import { RouteError } from './route-error.tsx';
 import { BenchRoute } from './routes/bench.tsx';
 import { NotFound } from './routes/not-found.tsx';
@@ -15,8 +16,8 @@ export const router = createBrowserRouter(
       hydrateFallbackElement: <p className="loading-words">Opening…</p>,
       children: [
         { path: '/', element: <BenchRoute /> },
-        { path: '/draw', lazy: async () => ({ Component: (await import('./routes/draw.tsx')).DrawRoute }) },
-        { path: '/start', lazy: async () => ({ Component: (await import('./routes/start.tsx')).StartRoute }) },
+        { path: '/draw', lazy: async () => ({ Component: (await loadPatiently(() => import('./routes/draw.tsx'))).DrawRoute }) },
+        { path: '/start', lazy: async () => ({ Component: (await loadPatiently(() => import('./routes/start.tsx'))).StartRoute }) },
         { path: '*', element: <NotFound /> },
       ],
     },

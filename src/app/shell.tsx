@@ -1,5 +1,7 @@
-import { lazy, Suspense, useEffect } from 'react';
+import { Suspense, useEffect } from 'react';
 import { Outlet } from 'react-router-dom';
+import { ErrorRegion } from '#src/components/error-region.tsx';
+import { later } from '#src/components/later.ts';
 import { startRunController } from '#src/features/run/run-controller.ts';
 import { loadLater } from '#src/lib/idle.ts';
 import { useExplain } from '#src/stores/explain-store.ts';
@@ -7,7 +9,7 @@ import { DialogHost } from './dialogs/dialog-host.tsx';
 import { keepDraft } from './keep-draft.ts';
 
 /** Everything that is not on the first view. */
-const later = [
+const rest = [
   () => import('#src/components/menu.tsx'),
   () => import('#src/features/nameplate/nameplate-layer.tsx'),
   () => import('#src/features/nameplate/explain-panel.tsx'),
@@ -21,22 +23,24 @@ const later = [
   () => import('./routes/start.tsx'),
 ];
 
-const ExplainPanel = lazy(async () => ({ default: (await import('#src/features/nameplate/explain-panel.tsx')).ExplainPanel }));
+const ExplainPanel = later(async () => (await import('#src/features/nameplate/explain-panel.tsx')).ExplainPanel);
 
 /** What every screen shares: the draft of this device, the runs of the circuit in hand, the one open dialog. */
 export function Shell() {
   const explaining = useExplain((state) => state.address !== null);
   useEffect(() => keepDraft(), []);
   useEffect(() => startRunController(), []);
-  useEffect(() => loadLater(later), []);
+  useEffect(() => loadLater(rest), []);
   return (
     <>
       <Outlet />
       <DialogHost />
       {explaining && (
-        <Suspense fallback={null}>
-          <ExplainPanel />
-        </Suspense>
+        <ErrorRegion name="The explanation" resetOn={[explaining]}>
+          <Suspense fallback={null}>
+            <ExplainPanel />
+          </Suspense>
+        </ErrorRegion>
       )}
     </>
   );

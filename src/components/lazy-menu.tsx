@@ -1,5 +1,6 @@
-import { lazy, Suspense, useState } from 'react';
+import { Suspense, useState } from 'react';
 import { Icon, type IconName } from './icons.tsx';
+import { later } from './later.ts';
 
 export type MenuEntry =
   | { readonly id: string; readonly label: string; readonly hint?: string; readonly disabled?: boolean; readonly onAction: () => void }
@@ -15,7 +16,7 @@ export interface MenuProps {
   readonly entries: readonly MenuEntry[];
 }
 
-const OpenMenu = lazy(async () => ({ default: (await import('./menu.tsx')).OpenMenu }));
+const OpenMenu = later(async () => (await import('./menu.tsx')).OpenMenu);
 
 /** A menu button whose list is loaded when it is first pressed, so that the first view stays light. */
 export function LazyMenu(props: MenuProps) {

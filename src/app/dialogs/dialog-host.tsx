@@ -1,13 +1,14 @@
-import { lazy, Suspense } from 'react';
+import { Suspense } from 'react';
 import { ErrorRegion } from '#src/components/error-region.tsx';
+import { later } from '#src/components/later.ts';
 import { useDialog } from '#src/stores/dialog-store.ts';
 
-const UnitsDialog = lazy(async () => ({ default: (await import('#src/features/settings/units-dialog.tsx')).UnitsDialog }));
-const KeysDialog = lazy(async () => ({ default: (await import('#src/features/settings/keys-dialog.tsx')).KeysDialog }));
-const AboutDialog = lazy(async () => ({ default: (await import('#src/features/settings/about-dialog.tsx')).AboutDialog }));
-const DifferenceDialog = lazy(async () => ({ default: (await import('#src/features/cases/difference-dialog.tsx')).DifferenceDialog }));
-const DeleteCaseDialog = lazy(async () => ({ default: (await import('#src/features/cases/delete-case-dialog.tsx')).DeleteCaseDialog }));
-const RefusedFileDialog = lazy(async () => ({ default: (await import('./refused-file-dialog.tsx')).RefusedFileDialog }));
+const UnitsDialog = later(async () => (await import('#src/features/settings/units-dialog.tsx')).UnitsDialog);
+const KeysDialog = later(async () => (await import('#src/features/settings/keys-dialog.tsx')).KeysDialog);
+const AboutDialog = later(async () => (await import('#src/features/settings/about-dialog.tsx')).AboutDialog);
+const DifferenceDialog = later(async () => (await import('#src/features/cases/difference-dialog.tsx')).DifferenceDialog);
+const DeleteCaseDialog = later(async () => (await import('#src/features/cases/delete-case-dialog.tsx')).DeleteCaseDialog);
+const RefusedFileDialog = later(async () => (await import('./refused-file-dialog.tsx')).RefusedFileDialog);
 
 /** The one open dialog; each is loaded when it is first asked for. */
 export function DialogHost() {

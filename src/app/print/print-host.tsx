@@ -1,5 +1,6 @@
 import { useEffect, useState } from 'react';
 import { flushSync } from 'react-dom';
+import { ErrorRegion } from '#src/components/error-region.tsx';
 import { PrintSheet } from './print-sheet.tsx';
 
 /** Puts the printed sheet on the page only while it is printed, whoever asked for it (menu, keys, the browser's own command). */
@@ -19,5 +20,10 @@ export function PrintHost() {
       paper.removeEventListener('change', follow);
     };
   }, []);
-  return printing ? <PrintSheet /> : null;
+  if (!printing) return null;
+  return (
+    <ErrorRegion name="The printed sheet">
+      <PrintSheet />
+    </ErrorRegion>
+  );
 }

@@ -1,6 +1,7 @@
-import { lazy, type ReactNode, Suspense, useMemo, useState } from 'react';
+import { type ReactNode, Suspense, useMemo, useState } from 'react';
 import { CautionLine } from '#src/components/caution-line.tsx';
 import { ErrorRegion } from '#src/components/error-region.tsx';
+import { later } from '#src/components/later.ts';
 import { useFormat } from '#src/components/use-format.ts';
 import { BenchDrawing } from '#src/features/bench/bench-drawing.tsx';
 import { CaseRow } from '#src/features/cases/case-row.tsx';
@@ -18,7 +19,7 @@ import { NoticeStrip } from '../notice-strip.tsx';
 import { PrintHost } from '../print/print-host.tsx';
 import { TopLine } from '../top-line.tsx';
 
-const NameplateLayer = lazy(async () => ({ default: (await import('#src/features/nameplate/nameplate-layer.tsx')).NameplateLayer }));
+const NameplateLayer = later(async () => (await import('#src/features/nameplate/nameplate-layer.tsx')).NameplateLayer);
 
 /** The bench: one sheet of paper, its regions divided by ink rules, in the arrangement the width allows. */
 export function BenchRoute() {
@@ -44,14 +45,16 @@ export function BenchRoute() {
 }
 
 function Drawing() {
-  const plate = useNameplate((state) => state.target !== null);
+  const plate = useNameplate((state) => state.target);
   return (
     <>
       <BenchDrawing />
       {plate && (
-        <Suspense fallback={null}>
-          <NameplateLayer />
-        </Suspense>
+        <ErrorRegion name="The nameplate" resetOn={[plate]}>
+          <Suspense fallback={null}>
+            <NameplateLayer />
+          </Suspense>
+        </ErrorRegion>
       )}
     </>
   );
