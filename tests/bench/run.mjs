@@ -1,6 +1,7 @@
 // Measures and prints. Each part is a module in this folder that exports `measure()`, which returns a list of
-// { name, value, unit, goal? } (goal: value should stay below it). Parts are bundled first, as the product's workers are.
-// `npm run bench` runs all parts, `npm run bench -- engine` one of them.
+// { name, value, unit, goal? } (goal: value should stay below it). The engine is bundled first, as the product's workers are;
+// the screen is measured in Chromium on the built product.
+// `npm run bench` runs all parts, `npm run bench -- engine` or `npm run bench -- screen` one of them.
 import { mkdtemp, rm } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
@@ -8,29 +9,33 @@ import { fileURLToPath, pathToFileURL } from 'node:url';
 import { build } from 'vite';
 
 const here = fileURLToPath(new URL('.', import.meta.url));
-const parts = ['engine'];
+const parts = ['engine', 'screen'];
 const asked = process.argv.slice(2);
 
 const folder = await mkdtemp(join(tmpdir(), 'swashbench-bench-'));
 let missed = 0;
+async function bundled(part) {
+  await build({
+    configFile: false,
+    logLevel: 'error',
+    root: here,
+    ssr: { noExternal: true },
+    build: {
+      ssr: join(here, `${part}.ts`),
+      outDir: folder,
+      emptyOutDir: false,
+      minify: false,
+      target: 'node20',
+      rollupOptions: { output: { entryFileNames: `${part}.mjs` } },
+    },
+  });
+  return import(pathToFileURL(join(folder, `${part}.mjs`)).href);
+}
+
 try {
   for (const part of parts) {
     if (asked.length > 0 && !asked.includes(part)) continue;
-    await build({
-      configFile: false,
-      logLevel: 'error',
-      root: here,
-      ssr: { noExternal: true },
-      build: {
-        ssr: join(here, `${part}.ts`),
-        outDir: folder,
-        emptyOutDir: false,
-        minify: false,
-        target: 'node20',
-        rollupOptions: { output: { entryFileNames: `${part}.mjs` } },
-      },
-    });
-    const { measure } = await import(pathToFileURL(join(folder, `${part}.mjs`)).href);
+    const { measure } = part === 'screen' ? await import('./screen.mjs') : await bundled(part);
     console.log(`\n${part}`);
     for (const { name, value, unit, goal } of await measure()) {
       const verdict = goal === undefined ? '' : value <= goal ? `  (goal ${goal} ${unit}: met)` : `  (goal ${goal} ${unit}: MISSED)`;
