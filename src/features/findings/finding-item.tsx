@@ -27,7 +27,10 @@ export function FindingItem({ entry, caution }: FindingItemProps) {
       </h3>
       <p className="finding-cause">
         <PhraseText phrase={finding.cause} caseId={finding.caseId} />
-        <RemedyWords finding={finding} />
+        <RemedyWords finding={finding} />{' '}
+        <button type="button" className="link finding-why" onClick={() => explain(`finding.${finding.id}`, finding.caseId)}>
+          How is this computed?
+        </button>
       </p>
       {caution && (
         <p className="finding-caution">
@@ -42,9 +45,6 @@ export function FindingItem({ entry, caution }: FindingItemProps) {
             Show the moment
           </button>
         )}
-        <button type="button" className="button-quiet finding-why" onClick={() => explain(`finding.${finding.id}`, finding.caseId)}>
-          How is this computed?
-        </button>
       </div>
     </article>
   );

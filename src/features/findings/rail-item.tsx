@@ -4,6 +4,7 @@ import { CaseLetter, FindingNumeral } from '#src/components/case-letter.tsx';
 import { PhraseText } from '#src/components/quantity.tsx';
 import { useCursor } from '#src/stores/cursor-store.ts';
 import { useDocument } from '#src/stores/document-store.ts';
+import { explain } from '#src/stores/explain-store.ts';
 import type { NumberedFinding } from '#src/stores/findings-numbering.ts';
 import type { FindingItemProps } from './finding-item.tsx';
 import { RemedyAction, RemedyWords } from './remedy.tsx';
@@ -37,7 +38,10 @@ export function RailItem({ entry, caution }: FindingItemProps) {
         <>
           <p className="finding-cause">
             <PhraseText phrase={finding.cause} caseId={finding.caseId} />
-            <RemedyWords finding={finding} />
+            <RemedyWords finding={finding} />{' '}
+            <button type="button" className="link finding-why" onClick={() => explain(`finding.${finding.id}`, finding.caseId)}>
+              How is this computed?
+            </button>
           </p>
           {caution && <p className="finding-cause">{caution}</p>}
           <RemedyAction finding={finding} />
