@@ -15,7 +15,7 @@ export function TopLine({ screen }: { readonly screen: 'bench' | 'draw' }) {
     return (
       <header className="top-line no-print">
         <LazyMenu label="Menu" face="menu" className="button-icon" entries={entries} />
-        <CircuitTitle most={31} />
+        <CircuitTitle most={27} />
         {screen === 'bench' && <PlayButton />}
       </header>
     );
