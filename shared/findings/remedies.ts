@@ -5,7 +5,7 @@ import type { Base, DriveLoad, FindingContext } from './context.ts';
 import { reliefsOf } from './context.ts';
 import type { Finding, Phrase, Seek } from './finding.ts';
 import { LEAST_RELIEF_GAP } from './house-rules.ts';
-import { say } from './phrase.ts';
+import { figure, say } from './phrase.ts';
 
 /** Remedies with one setting to be sought by running. A higher relief is never among them, nor anything above a rating. */
 
@@ -86,7 +86,28 @@ export function compensatorUp(context: FindingContext, pump: string, words: Phra
 
 /** Cracking pressure of a relief as its plate says [Pa]: set pressure ÷ (1 + override), or the raw value; a weak spring halves it. */
 export function cracking(base: Base, relief: string): number {
+  return (1 - 0.5 * (base.plate(relief).given('fault.weak-spring') ?? 0)) * soundCracking(base, relief);
+}
+
+/** The same of a valve in order [Pa]. */
+function soundCracking(base: Base, relief: string): number {
   const plate = base.plate(relief);
-  const weaker = 1 - 0.5 * (plate.given('fault.weak-spring') ?? 0);
-  return weaker * (plate.given('raw.crackingPressure') ?? crackingPressure(plate.number('setPressure'), plate.number('override')));
+  return plate.given('raw.crackingPressure') ?? crackingPressure(plate.number('setPressure'), plate.number('override'));
+}
+
+/** A relief whose setting would let the compensator work, but which opens under it: the valve is at fault, not a screw. null
+ *  when the setting itself is too low. */
+export function weakRelief(base: Base, pump: string, relief: string): Remedy | null {
+  const deadHead = base.plate(pump).number('compensatorPressure');
+  const sound = soundCracking(base, relief);
+  if (!(cracking(base, relief) <= deadHead && sound > deadHead)) return null;
+  return {
+    words: say(
+      'Set as it is, ',
+      base.name(relief),
+      ' should crack at ',
+      figure(sound, 'pressure'),
+      ': have it taken out and looked at, the spring is weak or broken. Screwing it in does not cure it.',
+    ),
+  };
 }

@@ -130,7 +130,8 @@ function notUpToSpeed(context: FindingContext, drive: DriveLoad): Finding[] {
   const speed = context.column(`${motor}.speed`);
   const all = { from: 0, to: context.end };
   const peak = amps ? highest(context.times, amps, all).value : 0;
-  if (!amps || !speed || peak < 0.02 * drive.facts.ratedCurrent || context.run.status !== 'finished') return [];
+  if (!amps || !speed || context.run.status !== 'finished') return [];
+  if (peak < 0.02 * drive.facts.ratedCurrent) return [neverOn(context, drive)];
   const back = lowest(context.times, speed, all);
   if (-back.value > drive.facts.pullOutSpeed && context.at(`${motor}.torque`, context.end) <= 0)
     return [turnsBackwards(context, drive, back)];
@@ -171,6 +172,20 @@ function notUpToSpeed(context: FindingContext, drive: DriveLoad): Finding[] {
       caution: AFTER_A_TRIP,
     },
   ];
+}
+
+function neverOn(context: FindingContext, drive: DriveLoad): Finding {
+  const motor = drive.component.id;
+  return {
+    id: `not-up-to-speed:${motor}`,
+    rule: 'not-up-to-speed',
+    severity: 2,
+    caseId: context.caseId,
+    component: motor,
+    headline: say('Motor is never switched on'),
+    cause: say('No flag of the tape closes its contactor, or it has no volts: it draws no current in this run.'),
+    remedy: { words: say('Set a flag on the tape that starts it, or look at the supply’s volts.') },
+  };
 }
 
 function turnsBackwards(context: FindingContext, drive: DriveLoad, back: { value: number; time: number }): Finding {

@@ -5,7 +5,7 @@ import { reliefsOf } from '../context.ts';
 import type { Finding } from '../finding.ts';
 import { GAUGE_ERROR, GAUGE_ERROR_UNKNOWN, LEAST_RELIEF_GAP, PASSING_LEAST, PASSING_SHARE, PASSING_TIME } from '../house-rules.ts';
 import { flow, heat, pressure, say, span } from '../phrase.ts';
-import { compensatorDown, cracking } from '../remedies.ts';
+import { compensatorDown, cracking, weakRelief } from '../remedies.ts';
 import { highest, mean, stretches, type Window } from '../series.ts';
 
 /** Relief against compensator: which opens first, how close they stand, and whether the relief passes oil for long. Every gap
@@ -88,11 +88,12 @@ function passes(context: FindingContext, relief: Component, pump: Component | un
       ),
       remedy:
         hidden && pump
-          ? compensatorDown(
+          ? (weakRelief(context, pump.id, relief.id) ??
+            compensatorDown(
               context,
               pump.id,
               say('Turn the compensator down until it works before the relief. A higher relief is not a cure.'),
-            )
+            ))
           : unseated && pump
             ? compensatorDown(
                 context,
@@ -141,15 +142,17 @@ function gaps(context: FindingContext, pump: Component, relief: Component): Find
           pressure(deadHead),
           '. Pressure cannot get there, so the pump stays on stroke and its flow crosses the relief.',
         ),
-        remedy: compensatorDown(
-          context,
-          pump.id,
-          say(
-            'Turn the compensator down first, until dead-head lies ',
-            pressure(LEAST_RELIEF_GAP),
-            ' under cracking. A higher relief is not a cure.',
+        remedy:
+          weakRelief(context, pump.id, relief.id) ??
+          compensatorDown(
+            context,
+            pump.id,
+            say(
+              'Turn the compensator down first, until dead-head lies ',
+              pressure(LEAST_RELIEF_GAP),
+              ' under cracking. A higher relief is not a cure.',
+            ),
           ),
-        ),
       },
     ];
   }
