@@ -1,5 +1,5 @@
 import { valueProblem } from '../allowed-values.ts';
-import { documentParameter, documentValue, effectiveValue, findCase, findChange, firstCase } from '../effective.ts';
+import { documentParameter, documentValue, effectiveValue, findChange, firstCase } from '../effective.ts';
 import { quantityInWords } from '../in-words.ts';
 import { findComponent, findKind, findParameter, findScrew, kindOfComponent } from '../kind-lookup.ts';
 import type { CaseChange, CircuitDocument, Component, ParameterValue, ValueSource } from '../schema.ts';
@@ -211,9 +211,4 @@ export function lockScrew(document: CircuitDocument, componentId: string, screwI
     ...component,
     screws: { ...component.screws, [screwId]: { ...component.screws?.[screwId], locked } },
   }));
-}
-
-/** All values a case changes, for the case card and the difference in words. */
-export function changesOf(document: CircuitDocument, caseId: string): readonly CaseChange[] {
-  return findCase(document, caseId)?.changes ?? [];
 }
