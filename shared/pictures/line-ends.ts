@@ -2,7 +2,7 @@ import type { Component } from '../circuit/schema.ts';
 import { type PlacedPort, type Point, placePort } from '../symbols/place.ts';
 import { symbolOf } from '../symbols/registry.ts';
 import type { Side } from '../symbols/symbol.ts';
-import { type Box, overlaps } from './placement.ts';
+import type { Box } from './placement.ts';
 
 /** Where lines end and how much room they take on the sheet; in modules. */
 
@@ -39,8 +39,4 @@ export function segmentBox(a: Point, b: Point, room: number): Box {
     w: Math.abs(a.x - b.x) + 2 * room,
     h: Math.abs(a.y - b.y) + 2 * room,
   };
-}
-
-export function segmentMeets(a: Point, b: Point, box: Box): boolean {
-  return overlaps(segmentBox(a, b, 0.01), box);
 }

@@ -89,19 +89,6 @@ export function barbPath(barb: Barb, forward: boolean, depth: number, half: numb
   return `M${text(bx - barb.uy * half)} ${text(by + barb.ux * half)}L${text(tx)} ${text(ty)}L${text(bx + barb.uy * half)} ${text(by - barb.ux * half)}`;
 }
 
-/** Point half way along a route and the direction there. */
-export function middleOf(points: readonly Point[]): Barb {
-  const legs = legsOf(points);
-  let longest = 0;
-  legs.forEach((leg, k) => {
-    if (leg.length > (legs[longest]?.length ?? 0)) longest = k;
-  });
-  const a = points[longest];
-  const leg = legs[longest];
-  if (!a || !leg) return { x: 0, y: 0, ux: 1, uy: 0 };
-  return { x: a.x + (leg.ux * leg.length) / 2, y: a.y + (leg.uy * leg.length) / 2, ux: leg.ux, uy: leg.uy };
-}
-
 function text(value: number): string {
   const rounded = Math.round(value * 1000) / 1000;
   return String(rounded === 0 ? 0 : rounded);

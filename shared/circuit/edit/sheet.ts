@@ -54,7 +54,7 @@ export function changeLabel(document: CircuitDocument, id: string, text: string)
   return { ...document, labels: document.labels.map((label) => (label.id === id ? { ...label, text: kept } : label)) };
 }
 
-/** Where a tag was dragged to, from the place the drawing would choose [modules]; null gives it back to the drawing. */
+/** Where a tag was dragged to: from its screw's anchor to the middle of the tag [modules]; null gives it back to the drawing. */
 export function setTagPlace(
   document: CircuitDocument,
   address: string,
