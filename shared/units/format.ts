@@ -1,5 +1,6 @@
 import { fromSi, preferredUnit, type UnitPreferences, unitById } from './convert.ts';
 import type { QuantityId, Unit } from './quantities.ts';
+import { tradeWords } from './trade-words.ts';
 
 /** Numbers as people read them: B612 value, thin space, unit; true minus sign; the person's decimal sign; five and more
  *  digits grouped by thin spaces. Loads round to nearest, margins round down (towards minus infinity). */
@@ -130,7 +131,7 @@ export function joined(value: string, symbol: string): string {
 
 export function phraseParts(phrase: readonly (string | PhraseFigure)[], preferences: UnitPreferences): PhrasePart[] {
   return phrase.map((part) => {
-    if (typeof part === 'string') return { type: 'words', text: part };
+    if (typeof part === 'string') return { type: 'words', text: tradeWords(part, preferences.system) };
     const { value, unit, text } = formatQuantity(part.value, part.quantity, preferences, {
       style: 'figure',
       digits: part.digits,

@@ -11,6 +11,7 @@ import {
   phraseParts,
 } from '#shared/units/format.ts';
 import type { QuantityId } from '#shared/units/quantities.ts';
+import { tradeWords } from '#shared/units/trade-words.ts';
 import { usePreferences } from '#src/stores/preferences-store.ts';
 
 export interface Format {
@@ -20,6 +21,8 @@ export interface Format {
   readonly number: (value: number, digits: number, rounding?: 'nearest' | 'down') => string;
   readonly phrase: (phrase: Phrase) => string;
   readonly parts: (phrase: Phrase) => PhrasePart[];
+  /** Plain text in the words of the person's trade. */
+  readonly words: (text: string) => string;
 }
 
 /** Numbers in the person's units and decimal sign. */
@@ -37,6 +40,7 @@ export function useFormat(): Format {
       number: (value, digits, rounding) => formatNumber(value, digits, preferences, rounding),
       phrase: (phrase) => formatPhrase(phrase, preferences),
       parts: (phrase) => phraseParts(phrase, preferences),
+      words: (text) => tradeWords(text, system),
     };
   }, [system, overrides, decimal]);
 }

@@ -113,7 +113,9 @@ export function VerdictChip({ verdict, state = 'done', size = 'dense', short = f
   const id: VerdictShape = verdict && !refused ? verdict.id : refused ? 'failed' : 'waiting';
   const figure = verdict?.figure && !refused ? format.figure(verdict.figure) : null;
   const text =
-    verdict && !refused ? `${verdict.word}${figure && !short ? `, ${joined(figure.value, figure.unit)}` : ''}` : stateWords[state];
+    verdict && !refused
+      ? `${format.words(verdict.word)}${figure && !short ? `, ${joined(figure.value, figure.unit)}` : ''}`
+      : stateWords[state];
   return (
     <span
       className={`chip chip-${size}${bare ? ' chip-bare' : ''}`}

@@ -1,4 +1,5 @@
 import { useEffect } from 'react';
+import { useFormat } from '#src/components/use-format.ts';
 import type { TagSpec } from './tag-specs.ts';
 import { setLock, type TurnRefusal } from './turning.ts';
 
@@ -10,6 +11,7 @@ export interface TagRefusalProps {
 
 /** Why a turn was not taken: at the tag, in words, with the one thing that helps. */
 export function TagRefusal({ spec, refusal, onDone }: TagRefusalProps) {
+  const { words } = useFormat();
   useEffect(() => {
     if (refusal.locked) return;
     const timer = setTimeout(onDone, 4000);
@@ -17,7 +19,7 @@ export function TagRefusal({ spec, refusal, onDone }: TagRefusalProps) {
   }, [refusal, onDone]);
   return (
     <div className="tag-refusal nodrag" role="status">
-      <span>{refusal.message}</span>
+      <span>{words(refusal.message)}</span>
       <span className="refusal-choices">
         {refusal.locked && (
           <button

@@ -25,7 +25,7 @@ export function tagNote(spec: TagSpec, state: TagState, activeInk: number, pinne
   if (Math.abs(state.turns) >= 0.125) return formatTurns(state.turns);
   const elsewhere = state.changedIn.filter((ink) => ink !== activeInk);
   if (elsewhere.length > 0) return `${elsewhere.map(caseLetter).join(', ')} ${elsewhere.length === 1 ? 'differs' : 'differ'}`;
-  if (state.locked) return 'lock-nut tight';
+  if (state.locked) return format.words('lock-nut tight');
   if (Math.abs(state.turns) > 1e-6) return 'a touch off';
   return pinned ? 'pinned' : 'as found';
 }
@@ -41,7 +41,7 @@ export function plateVoltage(document: CircuitDocument, spec: TagSpec): number |
 export function spokenValue(spec: TagSpec, state: TagState, format: Format): string {
   const parts = [tagValue(spec, state, format).text];
   if (spec.screw) parts.push(formatTurns(state.turns));
-  if (state.locked) parts.push('lock nut tight');
+  if (state.locked) parts.push(format.words('lock nut tight'));
   if (aboveRating(state)) parts.push('above the lowest rating');
   return parts.join(', ');
 }

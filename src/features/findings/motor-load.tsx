@@ -25,7 +25,7 @@ function cell(row: (typeof rows)[number][0], yardsticks: Yardsticks, format: For
       return format.quantity(yardsticks.stallCurrent, 'current', { digits: 0 }).text;
     return format.quantity(yardsticks.rmsCurrent, 'fraction', { digits: 0 }).text;
   }
-  return yardsticks.stalled ? 'pull-out' : format.number(yardsticks.peakTorque, 2);
+  return yardsticks.stalled ? format.words('pull-out') : format.number(yardsticks.peakTorque, 2);
 }
 
 /** Motor load of every case on the screen, one table per motor. */

@@ -2,6 +2,7 @@ import { caseLetter } from '#shared/circuit/edit/cases.ts';
 import { CaseLetter } from '#src/components/case-letter.tsx';
 import { SheetDialog } from '#src/components/dialog.tsx';
 import { PhraseText } from '#src/components/quantity.tsx';
+import { useFormat } from '#src/components/use-format.ts';
 import { useCursor } from '#src/stores/cursor-store.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { useExplain } from '#src/stores/explain-store.ts';
@@ -38,10 +39,11 @@ export function ExplainPanel() {
 }
 
 function Explanation({ explained }: { readonly explained: Explained }) {
+  const { words } = useFormat();
   return (
     <>
       <h3 className="explain-title">
-        {explained.title}
+        {words(explained.title)}
         {explained.value && (
           <span className="explain-value">
             <PhraseText phrase={explained.value} />
@@ -56,8 +58,8 @@ function Explanation({ explained }: { readonly explained: Explained }) {
       {explained.equation && (
         <section>
           <h4 className="region-heading">Equation</h4>
-          <p className="equation">{explained.equation}</p>
-          {explained.where && <p className="text-14 text-ink2">{explained.where}</p>}
+          <p className="equation">{words(explained.equation)}</p>
+          {explained.where && <p className="text-14 text-ink2">{words(explained.where)}</p>}
         </section>
       )}
       {explained.inputs.length > 0 && (
@@ -77,7 +79,7 @@ function Explanation({ explained }: { readonly explained: Explained }) {
           <h4 className="region-heading">Assumptions</h4>
           <ul className="word-list">
             {explained.assumptions.map((line) => (
-              <li key={line}>{line}</li>
+              <li key={line}>{words(line)}</li>
             ))}
           </ul>
         </section>
@@ -85,7 +87,7 @@ function Explanation({ explained }: { readonly explained: Explained }) {
       {explained.limits && (
         <section>
           <h4 className="region-heading">Limits</h4>
-          <p>{explained.limits}</p>
+          <p>{words(explained.limits)}</p>
         </section>
       )}
       <section>

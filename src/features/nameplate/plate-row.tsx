@@ -13,6 +13,7 @@ import { SourceFrame } from './source-frame.tsx';
 /** One value of a plate: name, value as typed, the same in the other system, and where it comes from. */
 export function PlateRow({ row }: { readonly row: PlateValue }) {
   const { spec } = row;
+  const { words } = useFormat();
   const [slot, setSlot] = useState<HTMLTableCellElement | null>(null);
   return (
     <>
@@ -24,7 +25,7 @@ export function PlateRow({ row }: { readonly row: PlateValue }) {
             title={`${spec.help} How is this computed?`}
             onClick={() => explain(`plate:${row.target}.${row.field}`)}
           >
-            {spec.label}
+            {words(spec.label)}
           </button>
         </th>
         <td className="plate-value">

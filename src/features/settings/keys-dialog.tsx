@@ -1,4 +1,5 @@
 import { SheetDialog } from '#src/components/dialog.tsx';
+import { useFormat } from '#src/components/use-format.ts';
 
 const groups = [
   {
@@ -47,6 +48,7 @@ const groups = [
 
 /** Letters and digits act only while the drawing or the tape has the focus, never from a field. */
 export function KeysDialog({ onClose }: { readonly onClose: () => void }) {
+  const { words } = useFormat();
   return (
     <SheetDialog title="Key list" onClose={onClose}>
       <p>Letters and digits act only while the drawing or the tape has the focus, never from a field.</p>
@@ -60,7 +62,7 @@ export function KeysDialog({ onClose }: { readonly onClose: () => void }) {
                   <th scope="row" className="key-name">
                     <kbd className="reading">{key}</kbd>
                   </th>
-                  <td>{does}</td>
+                  <td>{words(does)}</td>
                 </tr>
               ))}
             </tbody>
