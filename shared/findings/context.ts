@@ -103,8 +103,3 @@ export function reliefsOf(base: Base, pumpId: string): readonly Component[] {
   const nets = base.reach.always(`${pumpId}.outlet`);
   return base.ofKind('relief-valve').filter((relief) => nets.has(base.reach.netOf(`${relief.id}.P`)));
 }
-
-/** The motor on a pump's shaft. */
-export function driveOf(context: FindingContext, pumpId: string): DriveLoad | undefined {
-  return context.drives.find((drive) => drive.pumps.some((pump) => pump.id === pumpId));
-}

@@ -74,10 +74,6 @@ export function choice(
   return { type: 'choice', id, label, group, choices: choices.map(([value, text]) => ({ value, label: text })), initial, help, source };
 }
 
-export function fault(id: string, label: string, help: string): FaultSpec {
-  return { id, label, help };
-}
-
 /** An input that rests at the parameter of the same id and is moved by duty commands. */
 export function settingInput(
   id: string,

@@ -4,7 +4,7 @@ import * as S from './sources.ts';
 
 /** What every part with just an inlet A and an outlet B shares: one flow from A to B that depends on their pressures. */
 
-export const A = 0;
+/** Index of outlet B among the two ports. */
 export const B = 1;
 
 export const throughEntries = [

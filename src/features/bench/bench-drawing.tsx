@@ -150,6 +150,7 @@ function Flow({ bench, width, height, zoom, touch, besideWheel, onZoom, onOpen }
     return formerPlaces.current;
   };
   const formerNodes = useRef<ReadonlyMap<string, Node>>(new Map());
+  // biome-ignore lint/correctness/useExhaustiveDependencies: `samePlaces` keeps the former list through a reference
   const nodes = useMemo((): Node[] => {
     const fixed = { draggable: false, selectable: false, connectable: false, focusable: false };
     const at = (id: string, x: number, y: number) => (moving?.id === id ? { x: moving.x, y: moving.y } : { x: x * 10, y: y * 10 });

@@ -49,22 +49,21 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
   const { components, lines, shafts } = document;
 
   const formerSpecs = useRef(new Map<string, TagSpec>());
+  // biome-ignore lint/correctness/useExhaustiveDependencies: cases change no tag's place or name
   const specs = useMemo(() => {
     const next = tagSpecs({ ...document, components, lines, shafts }).map((spec) =>
       sameContent(formerSpecs.current.get(spec.address), spec),
     );
     formerSpecs.current = new Map(next.map((spec) => [spec.address, spec]));
     return next;
-    // Cases change no tag's place or name.
   }, [components, lines, shafts]);
-  // Routes are laid anew exactly when something on the sheet moves.
+  // biome-ignore lint/correctness/useExhaustiveDependencies: routes are laid anew exactly when something on the sheet moves; a value must not move tags
   const sheet = useMemo(() => {
     const bodies = bodiesOf(document, document.cases[0]?.id ?? caseId, routes);
     return { bodies, legs: legsOf(routes), readings: readingSpecs(document) };
-    // Not on every document: a value that changes nothing on the sheet must not move tags.
   }, [routes]);
 
-  // The view is chosen when the sheet or its region changes, never while a screw is turned.
+  // biome-ignore lint/correctness/useExhaustiveDependencies: the view is chosen when the sheet or its region changes, never while a screw is turned; panels count by their sizes
   const fit = useMemo(() => {
     const { bodies, legs, readings } = sheet;
     const wishes = specs.flatMap((spec) => {
@@ -75,7 +74,6 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
         : [];
     });
     return chooseFit({ document, bodies, legs, readings, wishes, size: { width, height }, touch, key, wheel, buttons });
-    // The panels are compared by their sizes.
   }, [sheet, width, height, touch, key?.width, key?.height, wheel?.width, wheel?.height, buttons.width, buttons.height]);
 
   const seen = zoom ?? fit.view.zoom;
@@ -114,6 +112,7 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
       return `${spec.address}:${form}:${form === 'chip' ? chip.length : ''}:${inHand === spec.address}:${dragged ? `${dragged.dx},${dragged.dy}` : ''}`;
     })
     .join(' ')}`;
+  // biome-ignore lint/correctness/useExhaustiveDependencies: `text` stands for all that decides where a tag stands
   const places = useMemo(() => {
     const before = kept.current;
     if (before && before.text === text && before.sheet === sheet && before.readings === readings) return before.places;
@@ -131,7 +130,6 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
     kept.current = { text, sheet, readings, view, places: next };
     keepPlaces(next);
     return next;
-    // `text` stands for all that decides where a tag stands.
   }, [text, sheet, readings]);
 
   return {
