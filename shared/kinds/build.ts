@@ -1,5 +1,5 @@
 import type { QuantityId } from '../units/quantities.ts';
-import type { ChoiceParameter, FaultSpec, InputSpec, NumberParameter, ParameterGroup, Plate } from './kind.ts';
+import type { ChoiceParameter, InputSpec, NumberParameter, ParameterGroup, Plate } from './kind.ts';
 import { ENTERED } from './sources.ts';
 
 /** Short forms in which kinds write their declarations, so that a nameplate row stays readable. */
