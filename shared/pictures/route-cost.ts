@@ -9,7 +9,21 @@ export interface Segment {
   readonly horizontal: boolean;
 }
 
-const BEND = 3;
+/** A leg by where it runs: from `low` to `high` along its axis, at `at` across it. */
+interface Leg {
+  readonly horizontal: boolean;
+  readonly low: number;
+  readonly high: number;
+  readonly at: number;
+}
+
+/** What routes keep clear of: symbols, and lines already on the sheet. */
+export interface Surroundings {
+  readonly boxes: readonly Box[];
+  readonly legs: readonly Leg[];
+}
+
+export const BEND = 3;
 const THROUGH_SYMBOL = 60;
 const NEAR_SYMBOL = 1.5;
 const ON_LINE = 40;
@@ -29,57 +43,48 @@ export function segmentsOf(points: readonly Point[]): Segment[] {
   return result;
 }
 
-function span(s: Segment): readonly [number, number] {
-  const p = s.horizontal ? s.a.x : s.a.y;
-  const q = s.horizontal ? s.b.x : s.b.y;
-  return p < q ? [p, q] : [q, p];
+/** The same legs, to be kept clear of. */
+export function legsOf(points: readonly Point[]): Leg[] {
+  return segmentsOf(points).map(({ a, b, horizontal }) => {
+    const p = horizontal ? a.x : a.y;
+    const q = horizontal ? b.x : b.y;
+    return { horizontal, low: Math.min(p, q), high: Math.max(p, q), at: horizontal ? a.y : a.x };
+  });
 }
 
-function across(s: Segment): number {
-  return s.horizontal ? s.a.y : s.a.x;
+function boxCost({ horizontal, low, high, at }: Leg, box: Box): number {
+  const left = horizontal ? box.x : box.y;
+  const right = left + (horizontal ? box.w : box.h);
+  const top = horizontal ? box.y : box.x;
+  const bottom = top + (horizontal ? box.h : box.w);
+  if (low >= right + 0.9 || high <= left - 0.9 || at <= top - 0.9 || at >= bottom + 0.9) return 0;
+  return low < right - 0.3 && high > left + 0.3 && at > top + 0.3 && at < bottom - 0.3 ? THROUGH_SYMBOL : NEAR_SYMBOL;
 }
 
-function meets(s: Segment, box: Box, grow: number): boolean {
-  const [low, high] = span(s);
-  const at = across(s);
-  const left = (s.horizontal ? box.x : box.y) - grow;
-  const right = (s.horizontal ? box.x + box.w : box.y + box.h) + grow;
-  const top = (s.horizontal ? box.y : box.x) - grow;
-  const bottom = (s.horizontal ? box.y + box.h : box.x + box.w) + grow;
-  return low < right && high > left && at > top && at < bottom;
-}
-
-function lineCost(s: Segment, other: Segment): number {
-  const [low, high] = span(s);
-  const [from, to] = span(other);
+function legCost(s: Leg, other: Leg): number {
   if (s.horizontal !== other.horizontal) {
-    const crosses = across(other) > low && across(other) < high && across(s) > from && across(s) < to;
-    return crosses ? CROSSING : 0;
+    return other.at > s.low && other.at < s.high && s.at > other.low && s.at < other.high ? CROSSING : 0;
   }
-  const shared = Math.min(high, to) - Math.max(low, from);
+  const gap = Math.abs(s.at - other.at);
+  if (gap >= LINE_GAP) return 0;
+  const shared = Math.min(s.high, other.high) - Math.max(s.low, other.low);
   if (shared <= 0) return 0;
-  const gap = Math.abs(across(s) - across(other));
-  if (gap < 0.5) return ON_LINE + 3 * shared;
-  return gap < LINE_GAP ? NEAR_LINE + shared : 0;
+  return gap < 0.5 ? ON_LINE + 3 * shared : NEAR_LINE + shared;
 }
 
-/** Cost of a path; stops counting once it is no better than `limit`. */
-export function routeCost(path: readonly Point[], obstacles: readonly Box[], drawn: readonly Segment[], limit: number): number {
-  const segments = segmentsOf(path);
-  let cost = BEND * Math.max(0, segments.length - 1);
-  for (const s of segments) {
-    const [low, high] = span(s);
-    cost += high - low;
-  }
-  for (const s of segments) {
-    for (const box of obstacles) {
+/** Cost of a path at right angles; stops counting once it is no better than `limit`. */
+export function routeCost(path: readonly Point[], { boxes, legs }: Surroundings, limit: number): number {
+  const own = legsOf(path);
+  let cost = BEND * Math.max(0, own.length - 1);
+  for (const leg of own) cost += leg.high - leg.low;
+  for (const leg of own) {
+    for (const box of boxes) {
       if (cost >= limit) return cost;
-      if (meets(s, box, -0.3)) cost += THROUGH_SYMBOL;
-      else if (meets(s, box, 0.9)) cost += NEAR_SYMBOL;
+      cost += boxCost(leg, box);
     }
-    for (const other of drawn) {
+    for (const other of legs) {
       if (cost >= limit) return cost;
-      cost += lineCost(s, other);
+      cost += legCost(leg, other);
     }
   }
   return cost;

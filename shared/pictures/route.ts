@@ -3,7 +3,7 @@ import { type PlacedPort, type Point, sweptBox } from '../symbols/place.ts';
 import { symbolOf } from '../symbols/registry.ts';
 import { endOf, outward, writtenValues } from './line-ends.ts';
 import type { Box } from './placement.ts';
-import { routeCost, type Segment, segmentsOf } from './route-cost.ts';
+import { BEND, legsOf, routeCost, type Surroundings } from './route-cost.ts';
 
 /** Routes of lines on the sheet: orthogonal, leaving each port along its side, on half-modules. Bends a person set are kept;
  *  otherwise the cheapest of a set of lanes is taken that avoids symbols and keeps parallel lines apart. Crossings never join. */
@@ -76,9 +76,29 @@ function lanes(a: number, b: number, edges: readonly number[]): number[] {
   return unique;
 }
 
-/** Cheapest route between two ports.
- *  @param obstacles boxes of symbols; @param drawn segments of other lines already on the sheet */
-export function routeBetween(from: PlacedPort, to: PlacedPort, obstacles: readonly Box[], drawn: readonly Segment[]): Point[] {
+/** Length and bends of a path of at most a few corners, in modules; infinite when it doubles back, slants, or does not leave its
+ *  first point along `away` and its last one along `toward`. Tells without any list whether a path is worth a closer look. */
+function plainCost(path: readonly Point[], away: Point, toward: Point): number {
+  let cost = -BEND;
+  let fx = 0;
+  let fy = 0;
+  for (let k = 1; k < path.length; k += 1) {
+    const dx = path[k]!.x - path[k - 1]!.x;
+    const dy = path[k]!.y - path[k - 1]!.y;
+    if (dx === 0 && dy === 0) continue;
+    if (dx !== 0 && dy !== 0) return Number.POSITIVE_INFINITY;
+    const along = dx * fx + dy * fy;
+    if (along < 0) return Number.POSITIVE_INFINITY;
+    if (fx === 0 && fy === 0 && dx * away.x + dy * away.y <= 0) return Number.POSITIVE_INFINITY;
+    cost += Math.abs(dx) + Math.abs(dy) + (along === 0 ? BEND : 0);
+    fx = dx;
+    fy = dy;
+  }
+  return fx * toward.x + fy * toward.y < 0 ? cost : Number.POSITIVE_INFINITY;
+}
+
+/** Cheapest route between two ports. */
+export function routeBetween(from: PlacedPort, to: PlacedPort, around: Surroundings): Point[] {
   const p0 = { x: from.x, y: from.y };
   const q0 = { x: to.x, y: to.y };
   const pd = outward(from.side);
@@ -87,47 +107,45 @@ export function routeBetween(from: PlacedPort, to: PlacedPort, obstacles: readon
   const q = { x: q0.x + qd.x * LEAD, y: q0.y + qd.y * LEAD };
   let best: Point[] | null = null;
   let least = Number.POSITIVE_INFINITY;
-  const offer = (middle: readonly Point[]) => {
-    const path = straighten([p0, ...middle, q0]);
-    if (!path || !isOrthogonal(path) || !leaves(path, pd) || !leaves([...path].reverse(), qd)) return;
-    const cost = routeCost(path, obstacles, drawn, least);
+  const offer = (...middle: readonly Point[]) => {
+    const whole = [p0, ...middle, q0];
+    // What a path comes near only adds to its cost.
+    if (!(plainCost(whole, pd, qd) < least)) return;
+    const path = straighten(whole);
+    if (!path) return;
+    const cost = routeCost(path, around, least);
     if (cost < least - 1e-9) {
       least = cost;
       best = path;
     }
   };
-  offer([]);
-  offer([{ x: p0.x, y: q0.y }]);
-  offer([{ x: q0.x, y: p0.y }]);
+  offer();
+  offer({ x: p0.x, y: q0.y });
+  offer({ x: q0.x, y: p0.y });
+  const { boxes } = around;
   const xs = lanes(
     p.x,
     q.x,
-    obstacles.flatMap((box) => [box.x - 1, box.x + box.w + 1]),
+    boxes.flatMap((box) => [box.x - 1, box.x + box.w + 1]),
   );
   const ys = lanes(
     p.y,
     q.y,
-    obstacles.flatMap((box) => [box.y - 1, box.y + box.h + 1]),
+    boxes.flatMap((box) => [box.y - 1, box.y + box.h + 1]),
   );
   for (const x of xs) {
-    offer([p, { x, y: p.y }, { x, y: q.y }, q]);
-    offer([
-      { x, y: p0.y },
-      { x, y: q0.y },
-    ]);
+    offer(p, { x, y: p.y }, { x, y: q.y }, q);
+    offer({ x, y: p0.y }, { x, y: q0.y });
   }
   for (const y of ys) {
-    offer([p, { x: p.x, y }, { x: q.x, y }, q]);
-    offer([
-      { x: p0.x, y },
-      { x: q0.x, y },
-    ]);
+    offer(p, { x: p.x, y }, { x: q.x, y }, q);
+    offer({ x: p0.x, y }, { x: q0.x, y });
   }
   if (least > directCost(p0, q0) + 12) {
     for (const x of xs.slice(0, MOST_LANES)) {
       for (const y of ys.slice(0, MOST_LANES)) {
-        offer([p, { x, y: p.y }, { x, y }, { x: q.x, y }, q]);
-        offer([p, { x: p.x, y }, { x, y }, { x, y: q.y }, q]);
+        offer(p, { x, y: p.y }, { x, y }, { x: q.x, y }, q);
+        offer(p, { x: p.x, y }, { x, y }, { x, y: q.y }, q);
       }
     }
   }
@@ -136,20 +154,6 @@ export function routeBetween(from: PlacedPort, to: PlacedPort, obstacles: readon
 
 function directCost(a: Point, b: Point): number {
   return Math.abs(a.x - b.x) + Math.abs(a.y - b.y) + (a.x === b.x || a.y === b.y ? 0 : 3);
-}
-
-function isOrthogonal(path: readonly Point[]): boolean {
-  return path.every((point, k) => {
-    const next = path[k + 1];
-    return !next || point.x === next.x || point.y === next.y;
-  });
-}
-
-function leaves(path: readonly Point[], direction: Point): boolean {
-  const a = path[0];
-  const b = path[1];
-  if (!a || !b) return false;
-  return (b.x - a.x) * direction.x + (b.y - a.y) * direction.y > 0;
 }
 
 /** Body to body: the stubs of both ends joined on. */
@@ -175,18 +179,16 @@ export function routeLines(document: Pick<CircuitDocument, 'components' | 'lines
   const order = due.map((_, index) => index);
   const rank = (index: number) => (due[index]!.line.route.length > 0 ? -1 : due[index]!.length);
   order.sort((a, b) => rank(a) - rank(b) || a - b);
-  const drawn: Segment[] = [];
+  const around: { boxes: Box[]; legs: ReturnType<typeof legsOf> } = { boxes: obstacles, legs: [] };
   const routes = new Map<string, RoutedLine>();
   for (const index of order) {
     const { line, from, to } = due[index]!;
     const bends = line.route;
     const points =
-      bends.length > 0
-        ? (straighten(throughBends(from, to, bends)) ?? throughBends(from, to, bends))
-        : routeBetween(from, to, obstacles, drawn);
+      bends.length > 0 ? (straighten(throughBends(from, to, bends)) ?? throughBends(from, to, bends)) : routeBetween(from, to, around);
     const kind = from.line !== 'working' ? from.line : to.line;
     const whole = withStubs(from, points, to);
-    drawn.push(...segmentsOf(whole));
+    around.legs.push(...legsOf(whole));
     routes.set(line.id, { id: line.id, kind, points: whole });
   }
   return routes;
