@@ -4,7 +4,7 @@
 export const STEEL_MODULUS = 207e9;
 export const STEEL_POISSON = 0.3;
 /** Friction factor of the quadratic part. With the laminar part beside it the sum is within 15 % of the smooth-pipe value
- *  above Re 4000, a quarter high at Re 1000 and up to 60 % high near Re 2000, where real lines scatter most. */
+ *  above Re 4000, about 30 % high at Re 1000 and up to 60 % high near Re 2000, where real lines scatter most. */
 export const QUADRATIC_FRICTION = 0.02;
 
 export function boreArea(bore: number): number {
