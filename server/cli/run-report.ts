@@ -64,7 +64,7 @@ function findingLines(finding: RunSummary['findings'][number]): string[] {
 }
 
 function yardstickLines(load: RunSummary['yardsticks'][number], nameOf: (id: string) => string): string[] {
-  const margin = load.stallMargin === null ? 'none' : quantity(load.stallMargin, 'ratio');
+  const margin = load.stallMargin === null ? 'none' : load.stallMargin > 100 ? 'over 100' : quantity(load.stallMargin, 'ratio');
   const stall = load.stalled && load.stallTime !== undefined ? `, stalls at ${seconds(load.stallTime)}` : '';
   const trip = load.tripTime === null ? 'does not trip' : `trips after ${quantity(load.tripTime, 'time')} of this duty, repeated`;
   const torque = `torque peak ${quantity(load.peakTorque, 'ratio')}, RMS ${quantity(load.rmsTorque, 'ratio')} rated`;

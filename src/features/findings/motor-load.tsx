@@ -15,10 +15,14 @@ const rows = [
   ['peak-torque', 'Peak, × rated torque'],
 ] as const;
 
+/** A motor that drives nothing has a margin without meaning: only that it is large is said. */
+const UNLOADED = 100;
+
 function cell(row: (typeof rows)[number][0], yardsticks: Yardsticks, format: Format): string {
   if (row === 'stall-margin') {
     if (yardsticks.stalled) return 'stalled';
-    return yardsticks.stallMargin === null ? '\u2013' : format.number(yardsticks.stallMargin, 1, 'down');
+    if (yardsticks.stallMargin === null) return '\u2013';
+    return yardsticks.stallMargin > UNLOADED ? `over ${UNLOADED}` : format.number(yardsticks.stallMargin, 1, 'down');
   }
   if (row === 'rms-current') {
     if (yardsticks.stalled && yardsticks.stallCurrent !== undefined)
