@@ -92,6 +92,26 @@ describe('drawing a circuit from an empty sheet', () => {
     }));
 });
 
+describe('a port', () => {
+  it('is found by a press 11 px beside its middle, at any zoom', () =>
+    journey({}, async ({ page, address }) => {
+      const draw = await new DrawPage(page).openEmpty(address('start'));
+      await page.getByRole('button', { name: /^Begin with a motor and a pump/ }).click();
+      await page.keyboard.press('Escape');
+      for (const out of [0, 2, 2]) {
+        for (let step = 0; step < out; step++) await draw.bar.getByRole('button', { name: 'Zoom out' }).click();
+        await page.waitForTimeout(300);
+        const ring = draw.ring('P1 outlet, open');
+        const box = await ring.boundingBox();
+        if (!box) throw new Error('the ring is not on the screen');
+        await page.mouse.click(box.x + box.width / 2, box.y + box.height / 2 - 11);
+        await seen(draw.strip);
+        await page.keyboard.press('Escape');
+        await gone(draw.strip);
+      }
+    }));
+});
+
 describe('a wrong circuit', () => {
   it('is explained in words on the drawing, and the cure is one press away', () =>
     journey({}, async ({ page, address }) => {
