@@ -18,7 +18,11 @@ export function loadPath(run: RunResult, curves: Pick<LoadCurves, 'pressureAddre
   const flow = channelOf(run, curves.flowAddress)?.values;
   if (!pressure || !flow || run.times.length === 0) return null;
   const kept = thinPath(pressure, flow, most);
-  const pick = (values: Float64Array) => Float64Array.from(kept, (i) => values[i] as number);
+  const pick = (values: Float64Array) => {
+    const picked = new Float64Array(kept.length);
+    for (let k = 0; k < kept.length; k += 1) picked[k] = values[kept[k] as number] as number;
+    return picked;
+  };
   return { times: pick(run.times), pressure: pick(pressure), flow: pick(flow) };
 }
 
@@ -74,7 +78,7 @@ function farthest(xs: Float64Array, ys: Float64Array, sx: number, sy: number, fr
 
 function largest(values: Float64Array): number {
   let most = 0;
-  for (const value of values) most = Math.max(most, Math.abs(value));
+  for (let i = 0; i < values.length; i += 1) most = Math.max(most, Math.abs(values[i] as number));
   return most;
 }
 

@@ -21,10 +21,11 @@ export interface CaseCardProps {
 /** One case: pen square, name, where it is shown, its motor load in small, its verdict. Pressing it puts it on the drawing. */
 export function CaseCard({ entry, place, form, shown }: CaseCardProps) {
   const run = useRuns((state) => state.byCase[entry.id]);
+  const due = useRuns((state) => state.due[entry.id] === true);
   const [renaming, setRenaming] = useState(false);
   const letter = caseLetter(entry);
   const active = place === 'drawing';
-  const state = run?.state === 'done' ? (run.stale ? 'stale' : 'done') : (run?.state ?? 'waiting');
+  const state = run?.state === 'done' ? (due || run.stale ? 'stale' : 'done') : (run?.state ?? 'waiting');
   const chip = (
     <VerdictChip verdict={run?.assessment?.verdict ?? null} state={state} short={form === 'phone'} bare={form === 'phone' && !active} />
   );

@@ -5,16 +5,17 @@ import { caseLetter, tracePen } from '#shared/pictures/case-pens.ts';
 import type { LoadCase } from '#shared/pictures/load-chart.ts';
 import { loadPath } from '#shared/pictures/load-path.ts';
 import { tapeStall } from '#shared/pictures/tape-references.ts';
-import { channelOf, valueAt } from '#shared/simulation/result.ts';
+import { channelOf, type RunResult, valueAt } from '#shared/simulation/result.ts';
 import type { UnitPreferences } from '#shared/units/convert.ts';
 import { formatQuantity } from '#shared/units/format.ts';
 import { useFormat } from '#src/components/use-format.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { type CaseRun, useRuns } from '#src/stores/run-store.ts';
+import { useShownDocument } from '#src/stores/shown-document.ts';
 
 /** Cases of the load picture from the stores; the case on the drawing comes last, on top. */
 export function useLoadCases(): LoadCase[] {
-  const document = useDocument((state) => state.document);
+  const document = useShownDocument();
   const activeCase = useDocument((state) => state.activeCase);
   const overlays = useDocument((state) => state.overlays);
   const byCase = useRuns((state) => state.byCase);
@@ -44,15 +45,16 @@ export function useLoadCases(): LoadCase[] {
 }
 
 type FromRun = Pick<LoadCase, 'curves' | 'path' | 'stall'>;
-const known = new WeakMap<CaseRun, FromRun | null>();
+const known = new WeakMap<RunResult, FromRun | null>();
 
 /** Path and stall of a run, worked out once per run. */
 function fromRun(state: CaseRun): FromRun | null {
-  const before = known.get(state);
-  if (before !== undefined) return before;
   const { run, curves, assessment } = state;
+  if (!run) return null;
+  const before = known.get(run);
+  if (before !== undefined) return before;
   let made: FromRun | null = null;
-  if (run && curves) {
+  if (curves) {
     const stall = tapeStall(run, assessment?.yardsticks ?? []);
     const pressure = channelOf(run, curves.pressureAddress)?.values;
     const flow = channelOf(run, curves.flowAddress)?.values;
@@ -65,7 +67,7 @@ function fromRun(state: CaseRun): FromRun | null {
           : null,
     };
   }
-  known.set(state, made);
+  known.set(run, made);
   return made;
 }
 

@@ -15,10 +15,10 @@ export function createSeeker(): Seeker {
 
   function next() {
     const { document, activeCase, overlays } = useDocument.getState();
-    const { byCase, remedies, putRemedy } = useRuns.getState();
+    const { byCase, due, remedies, putRemedy } = useRuns.getState();
     for (const caseId of [activeCase, ...overlays]) {
       const entry = byCase[caseId];
-      if (!entry || entry.stale || !entry.assessment) continue;
+      if (!entry?.assessment || entry.stale || due[caseId]) continue;
       for (const finding of entry.assessment.findings) {
         const key = remedyKey(finding);
         if (!finding.remedy?.seek || remedies[key] !== undefined) continue;

@@ -4,7 +4,7 @@ import { usePreferences } from '#src/stores/preferences-store.ts';
 import { drawTraces } from './draw-traces.ts';
 import type { TapeGeometry } from './tape-geometry.ts';
 import type { TapeModel } from './tape-model.ts';
-import { readTokens } from './tokens.ts';
+import { readTokens, type Tokens } from './tokens.ts';
 
 export interface TapeCanvasProps {
   readonly model: TapeModel;
@@ -20,6 +20,7 @@ export function TapeCanvas({ model, geometry, verticals }: TapeCanvasProps) {
   const projector = usePreferences((state) => state.projector);
   const fonts = useFontsReady();
   const density = useDensity();
+  const kept = useRef<{ look: string; tokens: Tokens } | null>(null);
   // biome-ignore lint/correctness/useExhaustiveDependencies: theme, projector mode and fonts change what the tokens give
   useLayoutEffect(() => {
     const canvas = ref.current;
@@ -31,7 +32,9 @@ export function TapeCanvas({ model, geometry, verticals }: TapeCanvasProps) {
     const context = canvas.getContext('2d');
     if (!context) return;
     context.setTransform(density, 0, 0, density, 0, 0);
-    drawTraces(context, model, geometry, readTokens(canvas), verticals);
+    const look = `${theme} ${document.documentElement.dataset.projector}`;
+    if (kept.current?.look !== look) kept.current = { look, tokens: readTokens(canvas) };
+    drawTraces(context, model, geometry, kept.current.tokens, verticals);
   }, [model, geometry, verticals, theme, projector, fonts, density]);
   return <canvas ref={ref} className="tape-canvas" style={{ width: geometry.width, height: geometry.height }} />;
 }

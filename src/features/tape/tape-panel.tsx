@@ -1,4 +1,4 @@
-import { useCallback, useMemo, useState } from 'react';
+import { useCallback, useMemo, useRef, useState } from 'react';
 import { addCommand, moveCommand, removeCommand } from '#shared/circuit/edit/duty.ts';
 import { commandWords, shortWords } from '#shared/duty/command-words.ts';
 import { kindOf } from '#shared/kinds/registry.ts';
@@ -16,7 +16,7 @@ import { RunControls } from './run-controls.tsx';
 import { TapeAxis } from './tape-axis.tsx';
 import { TapeFlags } from './tape-flags.tsx';
 import { TapeFoot, type TapeSheet } from './tape-foot.tsx';
-import { timeScale } from './tape-geometry.ts';
+import { timeScale, type Vertical } from './tape-geometry.ts';
 import { planTape, tapeMeasures } from './tape-layout.ts';
 import { TapeMarks } from './tape-marks.tsx';
 import { AddFlagMenu } from './tape-menus.tsx';
@@ -33,6 +33,15 @@ import './tape-sheets.css';
 /** Gives the focus back to a flag once its sheet is gone. */
 function focusFlag(id: string) {
   requestAnimationFrame(() => window.document.querySelector<HTMLElement>(`[data-command="${id}"]`)?.focus());
+}
+
+/** The former list as long as nothing in it changes, so that the canvas is not drawn for nothing. */
+function useSteady(list: readonly Vertical[]): readonly Vertical[] {
+  const kept = useRef(list);
+  const same =
+    kept.current.length === list.length && list.every(({ time, ink }, k) => kept.current[k]?.time === time && kept.current[k]?.ink === ink);
+  if (!same) kept.current = list;
+  return kept.current;
 }
 
 /** A numbered finding as the tape shows it. */
@@ -99,13 +108,14 @@ export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true 
     [findings, model.cases],
   );
   const show = useMemo(() => showIn(format.preferences), [format.preferences]);
+  // biome-ignore lint/correctness/useExhaustiveDependencies: of the circuit a flag's words hold the command and the component's name only
   const flags = useMemo(
     () =>
       document.duty.commands.map((command) => {
         const words = commandWords(document, kindOf, command, show);
         return { id: command.id, time: command.time, words, short: shortWords(words) };
       }),
-    [document, show],
+    [document.duty, document.components, show],
   );
   const x = useMemo(() => timeScale(geometry), [geometry]);
   const band = useMemo(
@@ -121,13 +131,11 @@ export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true 
       }),
     [flags, pins, numerals, x, geometry.plotWidth, measures.rowHeight, measures.shortFlags, measures.bareMarks, lanes],
   );
-  const verticals = useMemo(
-    () =>
-      band.marks.flatMap((mark) => {
-        const pin = mark.group?.pins.length === 1 ? mark.group.pins[0] : undefined;
-        return pin && (mark.words !== '' || pin.verdict || mark.numerals.length > 0) ? [{ time: pin.time, ink: pin.ink }] : [];
-      }),
-    [band.marks],
+  const verticals = useSteady(
+    band.marks.flatMap((mark) => {
+      const pin = mark.group?.pins.length === 1 ? mark.group.pins[0] : undefined;
+      return pin && (mark.words !== '' || pin.verdict || mark.numerals.length > 0) ? [{ time: pin.time, ink: pin.ink }] : [];
+    }),
   );
   const moments = useMemo(
     () =>

@@ -67,7 +67,7 @@ function caseRun(run: RunResult, stalls: boolean, part: Partial<CaseRun> = {}): 
     requirements: [],
     heat: 0,
   };
-  return { state: 'done', stale: false, run, assessment, curves: null, problems: [], reached: 8, ...part };
+  return { state: 'done', stale: false, document: demoCircuit, run, assessment, curves: null, problems: [], reached: 8, ...part };
 }
 
 function model(overlays: readonly string[] = ['A'], part: Partial<CaseRun> = {}) {

@@ -4,12 +4,13 @@ import { channelOf } from '#shared/simulation/result.ts';
 import { useFormat } from '#src/components/use-format.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { useRuns } from '#src/stores/run-store.ts';
+import { useShownDocument } from '#src/stores/shown-document.ts';
 import { useLaneChoice } from './lane-store.ts';
 import { type TapeModel, tapeCases, tapeModel } from './tape-model.ts';
 
 /** The tape's model from the stores: it changes with document, runs, case choice, units and lane choice, never with the cursor. */
 export function useTape(room: number): TapeModel {
-  const document = useDocument((state) => state.document);
+  const document = useShownDocument();
   const activeCase = useDocument((state) => state.activeCase);
   const overlays = useDocument((state) => state.overlays);
   const byCase = useRuns((state) => state.byCase);
