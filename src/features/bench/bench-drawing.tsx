@@ -10,6 +10,8 @@ import {
   type Viewport,
 } from 'reactflow';
 import { setTagPlace } from '#shared/circuit/edit/sheet.ts';
+import { narrowDemo, narrowReadings, narrowTags } from '#shared/circuit/samples/demo-narrow.ts';
+import type { CircuitDocument } from '#shared/circuit/schema.ts';
 import type { TagPlace } from '#shared/pictures/tag-slots.ts';
 import { useFormat } from '#src/components/use-format.ts';
 import { useLayout, useTouch } from '#src/lib/layout.ts';
@@ -44,7 +46,9 @@ function Drawing({ onOpen }: Required<BenchDrawingProps>) {
   const layout = useLayout();
   const touch = useTouch() || layout === 'phone';
   const phone = layout === 'phone';
-  const document = useDocument((state) => state.document);
+  const whole = useDocument((state) => state.document);
+  const narrow = useMemo(() => (phone ? narrowDemo(whole) : null), [phone, whole]);
+  const document = narrow ?? whole;
   const activeCase = useDocument((state) => state.activeCase);
   const inHand = useDocument((state) => state.inHand);
   const [ref, size] = useSize<HTMLDivElement>();
@@ -60,14 +64,16 @@ function Drawing({ onOpen }: Required<BenchDrawingProps>) {
     key: phone ? null : { width: KEY_WIDTH + 26, height: (wheelBeside ? PLAIN_KEY_HEIGHT : KEY_HEIGHT) + 14 },
     wheel: wheelBeside ? { width: WHEEL_WIDTH + 18, height: WHEEL_HEIGHT + 6 } : null,
     buttons: phone ? noRoom : buttonRoom(touch),
+    narrow: narrow && narrowContent,
   });
+  useFirstInHand(narrow !== null);
   const wheelBelow = inHand !== null && (phone || (wheelBeside && bench.wheelPlace === null));
 
-  const tag = bench.tags.find((entry) => entry.spec.address === inHand);
+  const tag = bench.screws.find((entry) => entry.spec.address === inHand);
   const buttons = <ZoomButtons zoom={zoom} touch={touch} width={size.width} height={size.height} onZoom={setZoom} />;
   return (
-    <div className="bench-drawing" data-layout={layout} data-below={wheelBelow || undefined}>
-      {phone && (
+    <div className="bench-drawing" data-layout={layout} data-narrow={narrow !== null || undefined} data-below={wheelBelow || undefined}>
+      {phone && !narrow && (
         <div className="phone-strip">
           <LineReading />
           {buttons}
@@ -75,6 +81,8 @@ function Drawing({ onOpen }: Required<BenchDrawingProps>) {
       )}
       <div ref={ref} className="bench-flow">
         <Flow
+          document={document}
+          still={narrow !== null}
           bench={bench}
           width={size.width}
           height={size.height}
@@ -99,10 +107,21 @@ function Drawing({ onOpen }: Required<BenchDrawingProps>) {
           <p className="bench-empty">Nothing is drawn yet. The Draw stage begins with a pump and a motor.</p>
         )}
       </div>
-      {tag && wheelBelow && <TurnWheel spec={tag.spec} state={tag.state} wide />}
-      {phone ? <FlowList tags={bench.tags} folded={wheelBelow} onOpen={onOpen} /> : <SpokenList />}
+      {tag && wheelBelow && <TurnWheel spec={tag.spec} state={tag.state} wide onParts={narrow ? layDown : undefined} />}
+      {phone && !(narrow && wheelBelow) ? <FlowList tags={bench.screws} folded={wheelBelow} onOpen={onOpen} /> : <SpokenList />}
     </div>
   );
+}
+
+const layDown = () => useDocument.getState().takeInHand(null);
+const narrowContent = { tags: narrowTags, readings: narrowReadings };
+
+/** The narrow demo opens with its max. volume stop in hand, so that the wheel is there to be turned. */
+function useFirstInHand(narrow: boolean) {
+  useEffect(() => {
+    const { inHand, takeInHand } = useDocument.getState();
+    if (narrow && inHand === null) takeInHand('P1.maxVolumeStop');
+  }, [narrow]);
 }
 
 const noRoom = { width: 0, height: 0 };
@@ -112,6 +131,9 @@ function buttonRoom(touch: boolean): { width: number; height: number } {
 }
 
 interface FlowProps {
+  readonly document: CircuitDocument;
+  /** The whole arrangement is always in sight: nothing is dragged and the page itself zooms. */
+  readonly still: boolean;
   readonly bench: BenchLayout;
   readonly width: number;
   readonly height: number;
@@ -123,8 +145,7 @@ interface FlowProps {
   readonly onOpen: (id: string) => void;
 }
 
-function Flow({ bench, width, height, zoom, touch, besideWheel, onZoom, onOpen }: FlowProps) {
-  const document = useDocument((state) => state.document);
+function Flow({ document, still, bench, width, height, zoom, touch, besideWheel, onZoom, onOpen }: FlowProps) {
   const activeCase = useDocument((state) => state.activeCase);
   const inHand = useDocument((state) => state.inHand);
   const format = useFormat();
@@ -186,7 +207,7 @@ function Flow({ bench, width, height, zoom, touch, besideWheel, onZoom, onOpen }
         selectable: false,
         connectable: false,
         focusable: false,
-        draggable: true,
+        draggable: !still,
         data: {
           spec,
           state,
@@ -205,7 +226,26 @@ function Flow({ bench, width, height, zoom, touch, besideWheel, onZoom, onOpen }
     const steady = steadyNodes(formerNodes.current, next);
     formerNodes.current = new Map(steady.map((node) => [node.id, node]));
     return steady;
-  }, [document, activeCase, routes, small, grow, readings, tags, inHand, ink, touch, besideWheel, zoom, fit, height, open, format, moving]);
+  }, [
+    document,
+    activeCase,
+    routes,
+    small,
+    grow,
+    readings,
+    tags,
+    inHand,
+    ink,
+    touch,
+    besideWheel,
+    zoom,
+    fit,
+    height,
+    open,
+    format,
+    moving,
+    still,
+  ]);
 
   function follow(changes: NodeChange[]) {
     for (const change of changes) {
@@ -241,6 +281,9 @@ function Flow({ bench, width, height, zoom, touch, besideWheel, onZoom, onOpen }
       onPaneClick={() => {
         if (pressedSheet.current) useDocument.getState().takeInHand(null);
       }}
+      panOnDrag={!still}
+      zoomOnScroll={!still}
+      zoomOnPinch={!still}
       minZoom={LEAST_ZOOM}
       maxZoom={MOST_ZOOM}
       nodesConnectable={false}

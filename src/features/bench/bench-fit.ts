@@ -29,6 +29,8 @@ export interface FitRequest {
   readonly key: Size | null;
   readonly wheel: Size | null;
   readonly buttons: Size;
+  /** An arrangement made for its region: it takes the whole width. */
+  readonly tight?: boolean;
 }
 
 export interface Fit {
@@ -41,6 +43,7 @@ export interface Fit {
 
 /** Room around the drawing that is tried [modules at full size]. */
 const rooms = [2, 3, 4, 5.5, 7] as const;
+const tightRooms = [0.6] as const;
 const MOST_ZOOM = 1.35;
 
 function panelBox(place: PanelPlace, view: View, panel: Size): Box {
@@ -103,7 +106,7 @@ function faults(request: FitRequest, fit: Fit): number {
 /** The largest view in which everything finds its place; where none does, the one with the fewest faults. */
 export function chooseFit(request: FitRequest): Fit {
   const { bodies, size, key } = request;
-  const views = rooms.map((room) => fitView(bodies.all, size.width, size.height, MOST_ZOOM, room));
+  const views = (request.tight ? tightRooms : rooms).map((room) => fitView(bodies.all, size.width, size.height, MOST_ZOOM, room));
   if (key) {
     const lower = fitView(bodies.all, size.width, Math.max(60, size.height - key.height), MOST_ZOOM, 2);
     views.push({ ...lower, top: lower.top - key.height / 10 / lower.zoom });

@@ -12,7 +12,7 @@ import { tagValue } from './tag-words.ts';
 import type { BenchLayout } from './use-bench-layout.ts';
 
 export interface FlowListProps {
-  readonly tags: BenchLayout['tags'];
+  readonly tags: BenchLayout['screws'];
   /** Only its head is shown while the turn wheel has the room; pressing it lays the screw down. */
   readonly folded: boolean;
   readonly onOpen: (id: string) => void;

@@ -16,6 +16,8 @@ export interface TurnWheelProps {
   readonly state: TagState;
   /** Under the drawing, as wide as the screen. */
   readonly wide?: boolean;
+  /** Lays the screw down, so that the list of parts has the room. */
+  readonly onParts?: () => void;
 }
 
 export const WHEEL_WIDTH = 404;
@@ -38,7 +40,7 @@ function knurls(turns: number, width: number): { readonly x: number; readonly st
 }
 
 /** The turn wheel for fingers: a knurled bar with a yellow window, a quarter-turn button on either side. */
-export function TurnWheel({ spec, state, wide }: TurnWheelProps) {
+export function TurnWheel({ spec, state, wide, onParts }: TurnWheelProps) {
   const format = useFormat();
   const [refusal, setRefusal] = useState<TurnRefusal | null>(null);
   const [typing, setTyping] = useState<string | null>(null);
@@ -54,6 +56,11 @@ export function TurnWheel({ spec, state, wide }: TurnWheelProps) {
           <strong>{spec.label}</strong>
           {!wide && ' in hand'}
         </span>
+        {onParts && (
+          <button type="button" className="link turn-wheel-parts" onClick={onParts}>
+            Parts
+          </button>
+        )}
         {typing === null ? (
           <button type="button" className="turn-wheel-value" aria-label={`${value.text}. Type a value`} onClick={() => setTyping('')}>
             <span className="reading">{value.value}</span> <span className="unit">{value.unit}</span>

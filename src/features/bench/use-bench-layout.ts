@@ -25,6 +25,8 @@ export interface BenchLayout {
   readonly readings: readonly { readonly spec: ReadingSpec; readonly box: Box }[];
   readonly tags: readonly { readonly spec: TagSpec; readonly state: TagState; readonly place: TagPlace }[];
   readonly ink: number;
+  /** Everything that can be turned, on the drawing or not. */
+  readonly screws: readonly { readonly spec: TagSpec; readonly state: TagState }[];
 }
 
 export interface LayoutOptions {
@@ -38,12 +40,14 @@ export interface LayoutOptions {
   readonly key: { readonly width: number; readonly height: number } | null;
   readonly wheel: { readonly width: number; readonly height: number } | null;
   readonly buttons: { readonly width: number; readonly height: number };
+  /** The narrow arrangement of the demo: which tags and readings (with their widths) stand on the drawing. */
+  readonly narrow?: { readonly tags: readonly string[]; readonly readings: Readonly<Record<string, number>> } | null;
 }
 
 /** Below this zoom tags are value chips, and readings move into the list. */
 export const CHIP_ZOOM = 0.6;
 export function useBenchLayout(document: CircuitDocument, caseId: string, options: LayoutOptions): BenchLayout {
-  const { width, height, zoom, touch, inHand, key, wheel, buttons } = options;
+  const { width, height, zoom, touch, inHand, key, wheel, buttons, narrow = null } = options;
   const format = useFormat();
   const routes = useRoutes(document);
   const { components, lines, shafts } = document;
@@ -60,20 +64,37 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
   // biome-ignore lint/correctness/useExhaustiveDependencies: routes are laid anew exactly when something on the sheet moves; a value must not move tags
   const sheet = useMemo(() => {
     const bodies = bodiesOf(document, document.cases[0]?.id ?? caseId, routes);
-    return { bodies, legs: legsOf(routes), readings: readingSpecs(document) };
+    return {
+      bodies,
+      legs: legsOf(routes),
+      readings: narrow ? narrowedReadings(readingSpecs(document), narrow.readings) : readingSpecs(document),
+    };
   }, [routes]);
 
   // biome-ignore lint/correctness/useExhaustiveDependencies: the view is chosen when the sheet or its region changes, never while a screw is turned; panels count by their sizes
   const fit = useMemo(() => {
     const { bodies, legs, readings } = sheet;
     const wishes = specs.flatMap((spec) => {
+      if (narrow && !narrow.tags.includes(spec.address)) return [];
       const state = tagState(document, caseId, spec);
       const chipText = state ? format.quantity(state.value, spec.quantity).value : '';
       return state
-        ? [{ spec, form: isFull(document, spec, null) ? ('full' as const) : ('compact' as const), chipText, inHand: false }]
+        ? [{ spec, form: !narrow && isFull(document, spec, null) ? ('full' as const) : ('compact' as const), chipText, inHand: false }]
         : [];
     });
-    return chooseFit({ document, bodies, legs, readings, wishes, size: { width, height }, touch, key, wheel, buttons });
+    return chooseFit({
+      document,
+      bodies,
+      legs,
+      readings,
+      wishes,
+      size: { width, height },
+      touch,
+      key,
+      wheel,
+      buttons,
+      tight: narrow !== null,
+    });
   }, [sheet, width, height, touch, key?.width, key?.height, wheel?.width, wheel?.height, buttons.width, buttons.height]);
 
   const seen = zoom ?? fit.view.zoom;
@@ -95,11 +116,11 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
       if (!now) continue;
       const state = sameContent(former.current.get(spec.address), now);
       former.current.set(spec.address, state);
-      const form: TagForm = small ? 'chip' : isFull(document, spec, inHand) ? 'full' : 'compact';
+      const form: TagForm = small ? 'chip' : !narrow && isFull(document, spec, inHand) ? 'full' : 'compact';
       found.push({ spec, state, form, chip: format.quantity(state.value, spec.quantity).value });
     }
     return found;
-  }, [specs, document, caseId, inHand, small, format]);
+  }, [specs, document, caseId, inHand, small, format, narrow]);
 
   const kept = useRef<{ text: string; sheet: unknown; readings: unknown; view: string; places: ReadonlyMap<string, TagPlace> } | null>(
     null,
@@ -117,7 +138,8 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
     const before = kept.current;
     if (before && before.text === text && before.sheet === sheet && before.readings === readings) return before.places;
     const steady = before && before.sheet === sheet && before.view === view ? before.places : null;
-    const wishes = states.map(({ spec, form, chip }) => ({ spec, form, chipText: chip, inHand: inHand === spec.address }));
+    const seated = narrow ? states.filter(({ spec }) => narrow.tags.includes(spec.address)) : states;
+    const wishes = seated.map(({ spec, form, chip }) => ({ spec, form, chipText: chip, inHand: inHand === spec.address }));
     const next = seatTags(
       wishes,
       document,
@@ -148,5 +170,13 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
       return place ? [{ spec, state, place }] : [];
     }),
     ink: findCase(document, caseId)?.ink ?? 0,
+    screws: states,
   };
+}
+
+function narrowedReadings(specs: readonly ReadingSpec[], wanted: Readonly<Record<string, number>>): readonly ReadingSpec[] {
+  return specs.flatMap((spec) => {
+    const width = wanted[spec.id];
+    return width === undefined ? [] : [{ ...spec, words: '', width }];
+  });
 }
