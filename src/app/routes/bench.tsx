@@ -90,11 +90,17 @@ function showFinding(numbered: readonly NumberedFinding[], number: number) {
 
 function Region({ name, title, children }: { readonly name: string; readonly title: string; readonly children: ReactNode }) {
   const document = useDocument((state) => state.document);
+  const inside = (
+    <ErrorRegion name={title} resetOn={[document]}>
+      {children}
+    </ErrorRegion>
+  );
+  const className = `region region-${name}`;
+  // Tape and load picture bring their own landmark.
+  if (name === 'tape' || name === 'load') return <div className={className}>{inside}</div>;
   return (
-    <section className={`region region-${name}`} aria-label={title}>
-      <ErrorRegion name={title} resetOn={[document]}>
-        {children}
-      </ErrorRegion>
+    <section className={className} aria-label={title}>
+      {inside}
     </section>
   );
 }
