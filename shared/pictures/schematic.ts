@@ -1,7 +1,8 @@
 import { findKind } from '../circuit/kind-lookup.ts';
 import type { CircuitDocument } from '../circuit/schema.ts';
-import { placePoint } from '../symbols/place.ts';
+import { placePoint, unionBox } from '../symbols/place.ts';
 import { symbolOf } from '../symbols/registry.ts';
+import { slipShapes, slipsOf } from './paper-slips.ts';
 import { routeLines } from './route.ts';
 import { type ReadingAt, schematicBounds, schematicShapes } from './schematic-shapes.ts';
 import type { Picture, Shape } from './shape.ts';
@@ -16,6 +17,7 @@ export interface SchematicOptions {
   readonly margin?: number;
   /** Numerals printed at screw anchors instead of tags: address 'component.screw' → numeral. */
   readonly numerals?: ReadonlyMap<string, string>;
+  /** Notes as paper slips and part labels as plates. */
   readonly notes?: boolean;
 }
 
@@ -30,7 +32,9 @@ export function schematicPicture(
   const routes = routeLines(document);
   const valuesOf = (component: CircuitDocument['components'][number]) => symbolValues(document, caseId, component);
   const margin = options.margin ?? 2;
-  const box = schematicBounds(document, valuesOf, routes) ?? { x: 0, y: 0, w: 20, h: 10 };
+  const slips = options.notes ? slipsOf(document) : [];
+  const drawn = schematicBounds(document, valuesOf, routes);
+  const box = unionBox([...(drawn ? [drawn] : []), ...slips.map((slip) => slip.box)]) ?? { x: 0, y: 0, w: 20, h: 10 };
   const shapes: Shape[] = [
     ...schematicShapes(
       document,
@@ -43,6 +47,7 @@ export function schematicPicture(
       },
       routes,
     ),
+    ...slips.flatMap(slipShapes),
     ...numeralShapes(document, options.numerals),
   ];
   return {

@@ -21,7 +21,7 @@ export async function exportDrawing(ending: 'svg' | 'png'): Promise<void> {
       const channel = channelOf(run, address);
       return channel ? valueAt(run.times, channel.values, time) : undefined;
     });
-  const picture = schematicPicture(document, activeCase, readings, { inkScale });
+  const picture = schematicPicture(document, activeCase, readings, { inkScale, notes: true });
   const svg = pictureToSvg(picture, 'light', { scale: MODULE, ground: 'sheet' });
   const name = fileName(`${document.title} drawing`, ending);
   if (ending === 'svg') saveFile(name, svg, 'image/svg+xml');
