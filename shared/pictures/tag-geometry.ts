@@ -17,6 +17,8 @@ export function nearestOn(box: Box, point: Point): Point {
 
 /** Whether a segment passes through a box (touching the edge does not count). */
 export function segmentThrough(a: Point, b: Point, box: Box): boolean {
+  if ((a.x <= box.x && b.x <= box.x) || (a.x >= box.x + box.w && b.x >= box.x + box.w)) return false;
+  if ((a.y <= box.y && b.y <= box.y) || (a.y >= box.y + box.h && b.y >= box.y + box.h)) return false;
   let low = 0;
   let high = 1;
   for (const axis of ['x', 'y'] as const) {

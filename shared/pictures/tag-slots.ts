@@ -138,17 +138,23 @@ function inside(box: Box, frame: Box | undefined): boolean {
   return box.x >= frame.x && box.y >= frame.y && box.x + box.w <= frame.x + frame.w && box.y + box.h <= frame.y + frame.h;
 }
 
-/** True when a tag may stand here; `crossing` = its string crosses a working line. */
-function judge(request: TagRequest, place: TagPlace, sheet: Sheet, others: readonly TagPlace[]): { free: boolean; crossing: boolean } {
-  const { box, string } = place;
-  const blocked =
-    !inside(box, sheet.frame) ||
+/** True when a tag would cover something here. */
+function covers(request: TagRequest, box: Box, sheet: Sheet, others: readonly TagPlace[]): boolean {
+  if (!inside(box, sheet.frame)) return true;
+  const around = grown(box, ROOM + 0.1);
+  return (
     request.bodies.some((body) => overlaps(box, body, 0.1)) ||
     sheet.symbols.some((other) => overlaps(box, other, ROOM)) ||
     sheet.words.some((other) => overlaps(box, other, ROOM)) ||
-    sheet.legs.some((leg) => legMeets(leg.a, leg.b, grown(box, ROOM + 0.1))) ||
-    others.some((other) => overlaps(box, other.box, ROOM));
-  if (blocked) return { free: false, crossing: true };
+    others.some((other) => overlaps(box, other.box, ROOM)) ||
+    sheet.legs.some((leg) => legMeets(leg.a, leg.b, around))
+  );
+}
+
+/** True when a tag may stand here; `crossing` = its string crosses a working line. */
+function judge(request: TagRequest, place: TagPlace, sheet: Sheet, others: readonly TagPlace[]): { free: boolean; crossing: boolean } {
+  const { box, string } = place;
+  if (covers(request, box, sheet, others)) return { free: false, crossing: true };
   const own = new Set(request.bodies.map(key));
   const strings =
     others.some((other) => stringCrosses(string, other.box)) ||
@@ -187,8 +193,8 @@ function underTheHand(request: TagRequest, sheet: Sheet, others: readonly TagPla
     y: held(y, sheet.frame?.y, sheet.frame?.h, size.h),
     ...size,
   };
-  const covers = (other: Box) => overlaps(box, other, ROOM);
-  if (before.form !== form && (sheet.symbols.some(covers) || others.some((other) => covers(other.box)))) return null;
+  const hides = (other: Box) => overlaps(box, other, ROOM);
+  if (before.form !== form && (sheet.symbols.some(hides) || others.some((other) => hides(other.box)))) return null;
   return placeOf(request, form, box, true, false);
 }
 
@@ -207,6 +213,7 @@ function seat(request: TagRequest, sheet: Sheet, others: readonly TagPlace[]): T
     const size = request.sizes[form];
     let second: TagPlace | null = null;
     for (const candidate of candidates(request, size, sheet)) {
+      if (covers(request, candidate.box, sheet, others)) continue;
       const place = placeOf(request, form, candidate.box, true, false);
       const verdict = judge(request, place, sheet, others);
       if (verdict.free && !verdict.crossing) return place;

@@ -17,6 +17,7 @@ import { useBenchKeys } from '../bench-keys.ts';
 import { BottomBar, type PhoneView } from '../bottom-bar.tsx';
 import { NoticeStrip } from '../notice-strip.tsx';
 import { PrintHost } from '../print/print-host.tsx';
+import { Staged, Stages } from '../staged.tsx';
 import { TopLine } from '../top-line.tsx';
 
 const NameplateLayer = later(async () => (await import('#src/features/nameplate/nameplate-layer.tsx')).NameplateLayer);
@@ -34,10 +35,12 @@ export function BenchRoute() {
           <CaseRow form={phone ? 'phone' : 'cards'} />
           <NoticeStrip />
         </div>
-        {layout === 'desk' && <WideBench form="list" layout="desk" />}
-        {layout === 'rail' && <WideBench form="rail" layout="rail" />}
-        {layout === 'narrow' && <NarrowBench />}
-        {phone && <PhoneBench />}
+        <Stages count={4}>
+          {layout === 'desk' && <WideBench form="list" layout="desk" />}
+          {layout === 'rail' && <WideBench form="rail" layout="rail" />}
+          {layout === 'narrow' && <NarrowBench />}
+          {phone && <PhoneBench />}
+        </Stages>
       </div>
       <PrintHost />
     </>
@@ -88,11 +91,14 @@ function showFinding(numbered: readonly NumberedFinding[], number: number) {
   if (entry) showMoment(entry.finding);
 }
 
-function Region({ name, title, children }: { readonly name: string; readonly title: string; readonly children: ReactNode }) {
+/** In which order the regions come when the bench opens. */
+const order = { drawing: 1, tape: 2, load: 3, findings: 4 } as const;
+
+function Region({ name, title, children }: { readonly name: keyof typeof order; readonly title: string; readonly children: ReactNode }) {
   const document = useDocument((state) => state.document);
   const inside = (
     <ErrorRegion name={title} resetOn={[document]}>
-      {children}
+      <Staged at={order[name]}>{children}</Staged>
     </ErrorRegion>
   );
   const className = `region region-${name}`;

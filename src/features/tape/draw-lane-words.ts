@@ -29,6 +29,20 @@ export function drawReferenceLines(context: Context, lane: TapeLane, place: Plac
   context.restore();
 }
 
+const widths = new Map<string, number>();
+
+/** Width of words in the font in force, measured once: measuring takes longer than drawing. */
+function widthOf(context: Context, words: string): number {
+  const key = `${context.font} ${words}`;
+  let width = widths.get(key);
+  if (width === undefined) {
+    if (widths.size > 500) widths.clear();
+    width = context.measureText(words).width;
+    widths.set(key, width);
+  }
+  return width;
+}
+
 /** Their words, over the traces on a ground of their own, at the right end. */
 export function drawReferenceWords(context: Context, lane: TapeLane, place: Place, geometry: TapeGeometry, tokens: Tokens): void {
   const y = laneScale(lane, place.top, place.height);
@@ -42,7 +56,7 @@ export function drawReferenceWords(context: Context, lane: TapeLane, place: Plac
     if (at < place.top || at > place.top + place.height) continue;
     const words = reference.label.replaceAll('\u202f', ' ');
     const base = at - place.top < size + 4 ? at + size + 2 : at - 4;
-    const width = context.measureText(words).width;
+    const width = widthOf(context, words);
     context.globalAlpha = 0.85;
     context.fillStyle = tokens.sheet;
     context.fillRect(geometry.plotWidth - width - 8, base - size + 1, width + 6, size + 2);
