@@ -21,7 +21,7 @@ export const schemas = {
   HealthResponse: healthResponse,
   SimulateRequest: simulateRequest,
   SimulateResponse: simulateResponse,
-} as const satisfies Record<string, z.ZodType>;
+} as const satisfies Record<string, z.core.$ZodType>;
 export type SchemaName = keyof typeof schemas;
 
 export const routes: readonly RouteContract[] = [

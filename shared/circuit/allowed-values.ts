@@ -1,4 +1,4 @@
-import type { z } from 'zod';
+import type * as z from 'zod/mini';
 import type { ParameterSpec } from '../kinds/kind.ts';
 import { screwRange } from './effective.ts';
 import { allowedInWords, plainNumber, rangeInWords } from './in-words.ts';
@@ -25,7 +25,7 @@ export function valueProblem(
   value: number | string,
 ): ValueProblem | null {
   if (target in groups) {
-    const shape = groups[target as keyof typeof groups].shape as Readonly<Record<string, z.ZodType>>;
+    const shape = groups[target as keyof typeof groups].shape as Readonly<Record<string, z.ZodMiniType>>;
     const type = shape[field];
     if (!type) return { message: `${target} has no '${field}'; it has ${Object.keys(shape).join(', ')}` };
     return schemaProblem(type, value);
@@ -116,7 +116,7 @@ function orNone(ids: readonly string[]): string {
 }
 
 /** Bounds written in the schema, as one message with the nearest value. */
-function schemaProblem(type: z.ZodType, value: number | string): ValueProblem | null {
+function schemaProblem(type: z.ZodMiniType, value: number | string): ValueProblem | null {
   const result = type.safeParse(value);
   if (result.success && value !== undefined) return null;
   for (const issue of result.error?.issues ?? []) {

@@ -1,9 +1,9 @@
-import type { z } from 'zod';
+import type * as z from 'zod/mini';
 import { plainNumber } from './in-words.ts';
 import type { Issue } from './issue.ts';
 
 /** What the schema found, in our words: every issue names its path, the value there and what is allowed. */
-export function structureIssues(error: z.ZodError, input: unknown): Issue[] {
+export function structureIssues(error: z.core.$ZodError, input: unknown): Issue[] {
   const issues: Issue[] = [];
   for (const issue of error.issues) {
     const path = issue.path.map((part) => (typeof part === 'symbol' ? String(part) : part));

@@ -12,7 +12,7 @@ const mayImport: Readonly<Record<string, readonly string[]>> = {
   tests: ['tests', 'server', 'src', 'shared'],
 };
 /** Packages that a folder may import; a folder that is not listed may import what package.json has. */
-const packagesOf: Readonly<Record<string, readonly string[]>> = { shared: ['zod'] };
+const packagesOf: Readonly<Record<string, readonly string[]>> = { shared: ['zod', 'zod/mini'] };
 /** What tests beside the code may import on top. */
 const isTest = (path: string) => /\.test\.tsx?$/.test(path);
 
