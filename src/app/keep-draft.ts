@@ -142,8 +142,23 @@ export function keepDraft(): () => void {
     }
   });
 
+  /** What a quick hand has begun before the draft was read; it goes on top of the draft, so that undo leads back to that. */
+  const blank = last.document;
+  let begun: Pick<typeof last, 'document' | 'activeCase' | 'overlays'> | null = null;
+  function goOn() {
+    if (!begun) return;
+    const { document, activeCase, overlays } = begun;
+    const { edit, setActiveCase, toggleOverlay } = useDocument.getState();
+    edit(() => document);
+    setActiveCase(activeCase);
+    for (const id of useDocument.getState().overlays.filter((entry) => !overlays.includes(entry))) toggleOverlay(id);
+    for (const id of overlays) if (!useDocument.getState().overlays.includes(id)) toggleOverlay(id);
+  }
+
   void readDraft()
     .then((draft) => {
+      const state = useDocument.getState();
+      if (state.document !== blank) begun = state;
       if (!draft || stopped || !restore(draft)) return false;
       keptAt = draft.savedAt;
       return true;
@@ -160,6 +175,7 @@ export function keepDraft(): () => void {
       ready = true;
       if (useKeeping.getState().keeping === 'loading') setKeeping(mine ? 'kept' : 'other-tab');
       setTakeOver(mine ? null : lock.takeOver);
+      goOn();
     });
 
   return () => {

@@ -52,6 +52,35 @@ describe('the circuit in hand', () => {
       await seen(bench.cases.getByRole('button', { name: 'overlaid: case A', pressed: true }));
     }));
 
+  it('is not lost to a hand that is quicker than the device: undo leads back to it', () =>
+    journey({}, async ({ page, address }) => {
+      const bench = await new BenchPage(page).open(address());
+      await turnIn(bench);
+      await bench.kept();
+      // The device answers late: a new circuit is chosen before the kept one has been read.
+      await page.addInitScript(() => {
+        const open = indexedDB.open.bind(indexedDB);
+        const late = (...asked: Parameters<typeof open>) => {
+          const request = open(...asked);
+          let told: ((event: Event) => void) | null = null;
+          request.addEventListener('success', (event) => setTimeout(() => told?.(event), 1500));
+          Object.defineProperty(request, 'onsuccess', { set: (handle: typeof told) => (told = handle) });
+          return request;
+        };
+        Object.defineProperty(indexedDB, 'open', { value: late });
+      });
+      await page.goto(address('start'));
+      await page.getByRole('button', { name: /^Empty sheet/ }).click();
+      await says(page.getByRole('heading', { level: 1 }), 'Untitled circuit');
+      await bench.kept();
+      await says(page.getByRole('heading', { level: 1 }), 'Untitled circuit');
+      await page.getByRole('toolbar', { name: 'Drawing' }).getByRole('button', { name: 'Undo' }).click();
+      await says(page.getByRole('heading', { level: 1 }), 'Cardboard press');
+      await page.getByRole('link', { name: 'Bench', exact: true }).click();
+      await bench.putOnDrawing('B');
+      await bench.tagSays(STOP, /^15\.0/);
+    }));
+
   it('survives a dropped connection: edited, run and kept without it, there after the next reload', () =>
     journey(
       {},
