@@ -42,7 +42,7 @@ export function pumpWords(frame: Frame): Shape[] {
   }
   return starts.flatMap((start) => {
     const text = `${start.letters.join(', ')} ${start.words}`;
-    const candidates = [9, -23, 26, -40].map((by) => wordsBox(text, start.x, start.y + by));
+    const candidates = [-22, 9, 26, -40].map((by) => wordsBox(text, start.x, start.y + by));
     return placeWords(frame, text, candidates, { ink: start.ink, ground: 'sheet' });
   });
 }

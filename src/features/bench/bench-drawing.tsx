@@ -24,7 +24,7 @@ import { InkKey, KEY_HEIGHT, KEY_WIDTH, MomentLine, PLAIN_KEY_HEIGHT } from './i
 import { LineReading } from './line-reading.tsx';
 import { steadyNodes } from './steady.ts';
 import { TurnWheel, WHEEL_HEIGHT, WHEEL_WIDTH } from './turn-wheel.tsx';
-import { type BenchLayout, useBenchLayout } from './use-bench-layout.ts';
+import { type BenchLayout, chipWords, useBenchLayout } from './use-bench-layout.ts';
 import { LEAST_ZOOM, MOST_ZOOM, ZoomButtons } from './zoom-buttons.tsx';
 import './bench.css';
 
@@ -151,7 +151,7 @@ function Flow({ document, still, bench, width, height, zoom, touch, besideWheel,
   const format = useFormat();
   const flow = useReactFlow();
   const [moving, setMoving] = useState<{ id: string; x: number; y: number } | null>(null);
-  const { fit, grow, routes, small, tags, readings, ink } = bench;
+  const { fit, grow, routes, small, tags, readings, slips, ink } = bench;
 
   const fitted = zoom === null;
   useEffect(() => {
@@ -188,7 +188,7 @@ function Flow({ document, still, bench, width, height, zoom, touch, besideWheel,
         position: { x: 0, y: 0 },
         zIndex: 0,
         ...fixed,
-        data: { document, caseId: activeCase, routes, textScale: small ? 0 : Math.max(1, grow), onOpen: open },
+        data: { document, caseId: activeCase, routes, textScale: small ? 0 : Math.max(1, grow), slips, grow, onOpen: open },
       },
       { id: 'strings', type: 'strings', position: { x: 0, y: 0 }, zIndex: 1, ...fixed, data: { places: samePlaces(places), grow, inHand } },
       ...readings.map(({ spec, box }) => ({
@@ -219,7 +219,8 @@ function Flow({ document, still, bench, width, height, zoom, touch, besideWheel,
           toolsAbove: zoom === null && (place.box.y + place.box.h - fit.top) * 10 * fit.zoom + 36 > height,
           onOpen: open,
           grow,
-          chipText: format.quantity(state.value, spec.quantity).value,
+          chipText: chipWords(format.quantity(state.value, spec.quantity), small),
+          withUnit: !small,
         },
       })),
     ];
@@ -232,6 +233,7 @@ function Flow({ document, still, bench, width, height, zoom, touch, besideWheel,
     routes,
     small,
     grow,
+    slips,
     readings,
     tags,
     inHand,

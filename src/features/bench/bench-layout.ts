@@ -1,5 +1,6 @@
 import type { CircuitDocument } from '#shared/circuit/schema.ts';
 import { endOf, segmentBox } from '#shared/pictures/line-ends.ts';
+import type { Slip } from '#shared/pictures/paper-slips.ts';
 import { overlaps } from '#shared/pictures/placement.ts';
 import type { RoutedLine } from '#shared/pictures/route.ts';
 import { segmentsOf } from '#shared/pictures/route-cost.ts';
@@ -124,6 +125,41 @@ function within(box: Box, frame: Box): boolean {
 /** Legs of working lines and of shafts. */
 export function legsOf(routes: ReadonlyMap<string, RoutedLine>): Leg[] {
   return [...routes.values()].flatMap((route) => segmentsOf(route.points));
+}
+
+/** Slips of notes and labels: where they were put or as near as may be, but never on anything else; those without room stay on the
+ *  Draw stage. Words keep their size on the screen, so a slip grows as the sheet shrinks. */
+export function placeSlips(
+  slips: readonly Slip[],
+  taken: readonly Box[],
+  legs: readonly Leg[],
+  grow: number,
+  frame: Box | undefined,
+): readonly PlacedSlip[] {
+  const covered = [...taken];
+  return slips.flatMap((slip): PlacedSlip[] => {
+    const w = slip.box.w * grow;
+    const h = slip.box.h * grow;
+    const at = ({ dx, dy }: { readonly dx: number; readonly dy: number }): Box => ({ x: slip.box.x + dx, y: slip.box.y + dy, w, h });
+    const free = spiral.find((step) => {
+      const box = at(step);
+      const grown = { x: box.x - 0.4, y: box.y - 0.4, w: w + 0.8, h: h + 0.8 };
+      return (
+        (!frame || within(box, frame)) &&
+        !covered.some((other) => overlaps(grown, other)) &&
+        !legs.some((leg) => legMeets(leg.a, leg.b, grown))
+      );
+    });
+    if (!free) return [];
+    const box = at(free);
+    covered.push(box);
+    return [{ slip, box }];
+  });
+}
+
+export interface PlacedSlip {
+  readonly slip: Slip;
+  readonly box: Box;
 }
 
 export interface TagWish {

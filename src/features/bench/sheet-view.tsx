@@ -1,5 +1,6 @@
 import { memo, useEffect, useMemo, useRef } from 'react';
 import type { CircuitDocument } from '#shared/circuit/schema.ts';
+import { type Slip, slipShapes } from '#shared/pictures/paper-slips.ts';
 import { FILLET } from '#shared/pictures/pressure-ink.ts';
 import type { RoutedLine } from '#shared/pictures/route.ts';
 import { filletPath } from '#shared/pictures/route-path.ts';
@@ -8,8 +9,10 @@ import { placePoint } from '#shared/symbols/place.ts';
 import { symbolOf } from '#shared/symbols/registry.ts';
 import { LineView } from '#src/components/schematic/line-view.tsx';
 import { ShaftsView } from '#src/components/schematic/shaft-view.tsx';
+import { ShapeView } from '#src/components/schematic/shape-view.tsx';
 import { SymbolView, type SymbolViewProps } from '#src/components/schematic/symbol-view.tsx';
 import { useJoinedPorts } from '#src/components/schematic/use-routes.ts';
+import type { PlacedSlip } from './bench-layout.ts';
 
 export interface SheetViewProps {
   readonly document: CircuitDocument;
@@ -17,6 +20,8 @@ export interface SheetViewProps {
   readonly routes: ReadonlyMap<string, RoutedLine>;
   /** Factor for small words; 0 leaves them out. */
   readonly textScale: number;
+  readonly slips: readonly PlacedSlip[];
+  readonly grow: number;
   readonly onOpen: (id: string) => void;
 }
 
@@ -24,7 +29,7 @@ export interface SheetViewProps {
 const LONG_PRESS = 550;
 
 /** Shafts, lines and symbols, live. The same sheet that is printed, ten pixels a module. */
-export const SheetView = memo(function SheetView({ document, caseId, routes, textScale, onOpen }: SheetViewProps) {
+export const SheetView = memo(function SheetView({ document, caseId, routes, textScale, slips, grow, onOpen }: SheetViewProps) {
   const joined = useJoinedPorts(document);
   const values = useSteadyValues(document, caseId);
   const group = useOpening(onOpen);
@@ -44,6 +49,9 @@ export const SheetView = memo(function SheetView({ document, caseId, routes, tex
             joined={joined(component.id)}
             textScale={textScale}
           />
+        ))}
+        {slips.map(({ slip, box }) => (
+          <SlipView key={slip.id} slip={slip} x={box.x} y={box.y} grow={grow} />
         ))}
         {textScale > 0 && document.components.map((component) => <Code key={component.id} component={component} textScale={textScale} />)}
       </g>
@@ -114,6 +122,21 @@ const SheetPart = memo(function SheetPart({ component, values, joined, textScale
       <SymbolView component={component} values={values} joined={joined} live textScale={textScale} />
     </g>
   );
+});
+
+const SlipView = memo(function SlipView({
+  slip,
+  x,
+  y,
+  grow,
+}: {
+  readonly slip: Slip;
+  readonly x: number;
+  readonly y: number;
+  readonly grow: number;
+}) {
+  const shapes = useMemo(() => slipShapes({ ...slip, box: { ...slip.box, x: 0, y: 0 } }), [slip]);
+  return <ShapeView shapes={shapes} className={`bench-slip bench-slip-${slip.kind}`} transform={`translate(${x} ${y}) scale(${grow})`} />;
 });
 
 const Code = memo(function Code({

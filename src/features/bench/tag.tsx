@@ -23,6 +23,8 @@ export interface TagProps {
   readonly ink: number;
   readonly inHand: boolean;
   readonly touch: boolean;
+  /** A chip says its unit. */
+  readonly withUnit: boolean;
   /** The buttons stand above the tag: below it there is no room. */
   readonly toolsAbove: boolean;
   /** Double click, long press or Enter. */
@@ -32,7 +34,7 @@ export interface TagProps {
 const RULER = 148;
 
 /** A screw tag on the drawing: full, compact, or the value alone. */
-export const Tag = memo(function Tag({ spec, state, form, eyelet, ink, inHand, touch, toolsAbove, onOpen }: TagProps) {
+export const Tag = memo(function Tag({ spec, state, form, eyelet, ink, inHand, touch, withUnit, toolsAbove, onOpen }: TagProps) {
   const format = useFormat();
   const [refusal, setRefusal] = useState<TurnRefusal | null>(null);
   const [typing, setTyping] = useState<string | null>(null);
@@ -60,7 +62,7 @@ export const Tag = memo(function Tag({ spec, state, form, eyelet, ink, inHand, t
   const shown = (
     <span className="tag-value">
       <span className="reading">{value.value}</span>
-      {form !== 'chip' && <span className="unit">{value.unit}</span>}
+      {(form !== 'chip' || withUnit) && <span className="unit">{value.unit}</span>}
     </span>
   );
   return (
@@ -72,6 +74,7 @@ export const Tag = memo(function Tag({ spec, state, form, eyelet, ink, inHand, t
       data-above={above || undefined}
       data-tag={spec.address}
       aria-label={title}
+      title={form === 'full' ? undefined : title}
       onDoubleClick={(event) => {
         if (!(event.target as Element).closest('button, input')) open();
       }}

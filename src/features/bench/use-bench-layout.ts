@@ -1,13 +1,14 @@
 import { useMemo, useRef } from 'react';
 import { findCase } from '#shared/circuit/effective.ts';
 import type { CircuitDocument } from '#shared/circuit/schema.ts';
+import { slipsOf } from '#shared/pictures/paper-slips.ts';
 import type { RoutedLine } from '#shared/pictures/route.ts';
 import type { TagForm, TagPlace } from '#shared/pictures/tag-slots.ts';
 import type { Box } from '#shared/symbols/place.ts';
 import { useRoutes } from '#src/components/schematic/use-routes.ts';
 import { useFormat } from '#src/components/use-format.ts';
 import { chooseFit, type PanelPlace } from './bench-fit.ts';
-import { bodiesOf, growth, legsOf, placeReadings, seatTags, type View, visibleBox } from './bench-layout.ts';
+import { bodiesOf, growth, legsOf, type PlacedSlip, placeReadings, placeSlips, seatTags, type View, visibleBox } from './bench-layout.ts';
 import { keepPlaces } from './bench-places.ts';
 import { type ReadingSpec, readingSpecs } from './reading-specs.ts';
 import { sameContent } from './steady.ts';
@@ -24,6 +25,8 @@ export interface BenchLayout {
   readonly small: boolean;
   readonly readings: readonly { readonly spec: ReadingSpec; readonly box: Box }[];
   readonly tags: readonly { readonly spec: TagSpec; readonly state: TagState; readonly place: TagPlace }[];
+  /** Notes and part labels for which there is room. */
+  readonly slips: readonly PlacedSlip[];
   readonly ink: number;
   /** Everything that can be turned, on the drawing or not. */
   readonly screws: readonly { readonly spec: TagSpec; readonly state: TagState }[];
@@ -46,6 +49,12 @@ export interface LayoutOptions {
 
 /** Below this zoom tags are value chips, and readings move into the list. */
 export const CHIP_ZOOM = 0.6;
+
+/** What a chip says: the number alone on a small drawing, with its unit where a tag only lacks the room. */
+export function chipWords({ value, unit }: { readonly value: string; readonly unit: string }, small: boolean): string {
+  return small || unit === '' ? value : `${value} ${unit}`;
+}
+
 export function useBenchLayout(document: CircuitDocument, caseId: string, options: LayoutOptions): BenchLayout {
   const { width, height, zoom, touch, inHand, key, wheel, buttons, narrow = null } = options;
   const format = useFormat();
@@ -77,7 +86,7 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
     const wishes = specs.flatMap((spec) => {
       if (narrow && !narrow.tags.includes(spec.address)) return [];
       const state = tagState(document, caseId, spec);
-      const chipText = state ? format.quantity(state.value, spec.quantity).value : '';
+      const chipText = state ? chipWords(format.quantity(state.value, spec.quantity), false) : '';
       return state
         ? [{ spec, form: !narrow && isFull(document, spec, null) ? ('full' as const) : ('compact' as const), chipText, inHand: false }]
         : [];
@@ -117,7 +126,7 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
       const state = sameContent(former.current.get(spec.address), now);
       former.current.set(spec.address, state);
       const form: TagForm = small ? 'chip' : !narrow && isFull(document, spec, inHand) ? 'full' : 'compact';
-      found.push({ spec, state, form, chip: format.quantity(state.value, spec.quantity).value });
+      found.push({ spec, state, form, chip: chipWords(format.quantity(state.value, spec.quantity), small) });
     }
     return found;
   }, [specs, document, caseId, inHand, small, format, narrow]);
@@ -154,8 +163,24 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
     return next;
   }, [text, sheet, readings]);
 
+  const { notes, labels } = document;
+  const slips = useMemo(() => {
+    if (small || (notes.length === 0 && labels.length === 0)) return [];
+    const { bodies, legs } = sheet;
+    const strings = [...places.values()].map(({ string }) => ({ a: string.from, b: string.to }));
+    const taken = [
+      ...[...bodies.byComponent.values()].flat(),
+      ...bodies.words,
+      ...blocked,
+      ...readings.values(),
+      ...[...places.values()].map((place) => place.box),
+    ];
+    return placeSlips(slipsOf({ notes, labels }), taken, [...legs, ...strings], grow, frame);
+  }, [notes, labels, sheet, places, readings, blocked, frame, grow, small]);
+
   return {
     routes,
+    slips,
     fit: fit.view,
     keyPlace: fit.keyPlace,
     wheelPlace: fit.wheelPlace,

@@ -32,12 +32,6 @@ export function FindingItem({ entry, caution }: FindingItemProps) {
           How is this computed?
         </button>
       </p>
-      {caution && (
-        <p className="finding-caution">
-          <CautionIcon size={16} />
-          <span>{caution}</span>
-        </p>
-      )}
       <div className="finding-actions">
         <RemedyAction finding={finding} />
         {finding.time !== undefined && (
@@ -46,6 +40,12 @@ export function FindingItem({ entry, caution }: FindingItemProps) {
           </button>
         )}
       </div>
+      {caution && (
+        <p className="finding-caution">
+          <CautionIcon size={16} />
+          <span>{caution}</span>
+        </p>
+      )}
     </article>
   );
 }

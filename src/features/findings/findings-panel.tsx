@@ -20,23 +20,25 @@ export function FindingsPanel({ form }: FindingsPanelProps) {
   const shown = open ? findings : findings.slice(0, FIRST);
   return (
     <div className={`findings findings-${form}`}>
-      <FindingsState />
-      <ol className="finding-list">
-        {shown.map((entry, index) => (
-          <li key={`${entry.finding.caseId}:${entry.finding.id}`} value={entry.number}>
-            {form === 'rail' ? (
-              <RailItem entry={entry} caution={firstWith(shown, index)} />
-            ) : (
-              <FindingItem entry={entry} caution={firstWith(shown, index)} />
-            )}
-          </li>
-        ))}
-      </ol>
-      {rest > 0 && (
-        <button type="button" className="findings-more" aria-expanded={open} onClick={() => setOpen(!open)}>
-          {open ? 'Only the worst three' : `${rest} more`}
-        </button>
-      )}
+      <div className="findings-scroll">
+        <FindingsState />
+        <ol className="finding-list">
+          {shown.map((entry, index) => (
+            <li key={`${entry.finding.caseId}:${entry.finding.id}`} value={entry.number}>
+              {form === 'rail' ? (
+                <RailItem entry={entry} caution={firstWith(shown, index)} />
+              ) : (
+                <FindingItem entry={entry} caution={firstWith(shown, index)} />
+              )}
+            </li>
+          ))}
+        </ol>
+        {rest > 0 && (
+          <button type="button" className="findings-more" aria-expanded={open} onClick={() => setOpen(!open)}>
+            {open ? 'Only the worst three' : `${rest} more`}
+          </button>
+        )}
+      </div>
       <MotorLoad />
     </div>
   );
