@@ -9,16 +9,27 @@ const queries = [
   ['narrow', '(min-width: 600px)'],
 ] as const;
 
+const lists = new Map<string, MediaQueryList>();
+
+/** One list per question for the life of the page: asking anew costs more than rendering. */
+function media(query: string): MediaQueryList {
+  let list = lists.get(query);
+  if (!list) {
+    list = window.matchMedia(query);
+    lists.set(query, list);
+  }
+  return list;
+}
+
 function subscribe(notify: () => void): () => void {
-  const lists = queries.map(([, query]) => window.matchMedia(query));
-  for (const list of lists) list.addEventListener('change', notify);
+  for (const [, query] of queries) media(query).addEventListener('change', notify);
   return () => {
-    for (const list of lists) list.removeEventListener('change', notify);
+    for (const [, query] of queries) media(query).removeEventListener('change', notify);
   };
 }
 
 function current(): Layout {
-  return queries.find(([, query]) => window.matchMedia(query).matches)?.[0] ?? 'phone';
+  return queries.find(([, query]) => media(query).matches)?.[0] ?? 'phone';
 }
 
 export function useLayout(): Layout {
@@ -28,12 +39,11 @@ export function useLayout(): Layout {
 const coarse = '(pointer: coarse)';
 
 function subscribeTouch(notify: () => void): () => void {
-  const list = window.matchMedia(coarse);
-  list.addEventListener('change', notify);
-  return () => list.removeEventListener('change', notify);
+  media(coarse).addEventListener('change', notify);
+  return () => media(coarse).removeEventListener('change', notify);
 }
 
 /** True when the main pointer is a finger. */
 export function useTouch(): boolean {
-  return useSyncExternalStore(subscribeTouch, () => window.matchMedia(coarse).matches);
+  return useSyncExternalStore(subscribeTouch, () => media(coarse).matches);
 }
