@@ -15,8 +15,8 @@ export class StepRecorder {
   private readonly system: CircuitSystem;
   private readonly reader: ColumnReader;
   private readonly y: Float64Array;
-  /** Steps up to this length [s] are recorded at their middle and end only, longer ones at every quarter: the picture of a run
-   *  has no more than a few thousand places across. */
+  /** Steps up to this length [s] are looked at in their middle and at their end only, longer ones at every quarter: the picture of a
+   *  run has no more than a few thousand places across. */
   private readonly short: number;
 
   constructor(system: CircuitSystem) {
@@ -64,15 +64,16 @@ export class StepRecorder {
     const { system, y } = this;
     const length = integrator.to - integrator.from;
     let tripped: Tripped | null = null;
-    for (let k = 1; k <= 4; k++) {
+    const stride = length > this.short ? 1 : 2;
+    for (let k = stride; k <= 4; k += stride) {
       const q = end * (k / 4);
       const whole = q === 1;
       if (!whole) integrator.dense(q, y);
       const time = whole ? integrator.to : integrator.from + q * length;
       system.read(time, whole ? integrator.after : y);
-      if (k % 2 === 0 || length > this.short) this.row(time);
+      this.row(time);
       if (k % 2 === 0) this.audit.sample(k / 2);
-      tripped = this.signals.look(integrator, end * ((k - 1) / 4), q) ?? tripped;
+      tripped = this.signals.look(integrator, end * ((k - stride) / 4), q) ?? tripped;
       if (tripped !== null && end === 1) return tripped;
     }
     return null;
