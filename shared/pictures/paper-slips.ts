@@ -4,16 +4,16 @@ import type { Shape } from './shape.ts';
 
 /** Notes as paper slips and part labels as small metal plates: their size and their shapes in modules. */
 
-const NOTE_SIZE = 1.4;
-const FOOT_SIZE = 1.25;
+const NOTE_SIZE = 1.3;
+const FOOT_SIZE = 1.2;
 const LEADING = 1.36;
 const FOLD = 1.4;
 const PADDING = 1;
 /** Letters in a line of a note, of the width a slip has on the Draw stage. */
-const NOTE_LETTERS = 32;
+const NOTE_LETTERS = 36;
 const LABEL_LETTERS = 24;
 /** Modules a letter takes on average, per module of its size. */
-const LETTER = 0.53;
+const LETTER = 0.51;
 
 export interface Slip {
   readonly id: string;
