@@ -44,6 +44,9 @@ export function useTurnKeys({ spec, onRefused, onOpen, onType }: TurnKeyOptions)
   };
 }
 
+/** Notches that follow each other within this are one run [ms]; long enough for a slow machine. */
+const RUN_OF_NOTCHES = 600;
+
 /** Turning with the wheel over the element: one notch is a quarter turn, Shift fine. A run of notches is one step of the
  *  history. */
 export function useTurnWheel<E extends HTMLElement>(spec: TagSpec, onRefused: (refusal: TurnRefusal | null) => void) {
@@ -80,7 +83,7 @@ export function useTurnWheel<E extends HTMLElement>(spec: TagSpec, onRefused: (r
         window.addEventListener('wheel', turn, { capture: true, passive: false });
       }
       clearTimeout(rest);
-      rest = setTimeout(finish, 350);
+      rest = setTimeout(finish, RUN_OF_NOTCHES);
       tell(setTo(turned, state.value - notches * (event.shiftKey ? FINE : QUARTER) * state.perTurn));
     };
     target.addEventListener('wheel', turn, { passive: false });
