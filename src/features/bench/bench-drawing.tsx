@@ -10,7 +10,7 @@ import {
   type Viewport,
 } from 'reactflow';
 import { setTagPlace } from '#shared/circuit/edit/sheet.ts';
-import { narrowDemo, narrowReadings, narrowTags } from '#shared/circuit/samples/demo-narrow.ts';
+import { narrowDemo } from '#shared/circuit/samples/demo-narrow.ts';
 import type { CircuitDocument } from '#shared/circuit/schema.ts';
 import type { TagPlace } from '#shared/pictures/tag-slots.ts';
 import { useFormat } from '#src/components/use-format.ts';
@@ -22,10 +22,11 @@ import { benchNodeTypes } from './bench-nodes.tsx';
 import { FlowList, SpokenList } from './flow-list.tsx';
 import { InkKey, KEY_HEIGHT, KEY_WIDTH, MomentLine, PLAIN_KEY_HEIGHT } from './ink-key.tsx';
 import { LineReading } from './line-reading.tsx';
+import { layDown, narrowContent, useFirstInHand } from './narrow-bench.ts';
 import { steadyNodes } from './steady.ts';
 import { TurnWheel, WHEEL_HEIGHT, WHEEL_WIDTH } from './turn-wheel.tsx';
 import { type BenchLayout, chipWords, useBenchLayout } from './use-bench-layout.ts';
-import { LEAST_ZOOM, MOST_ZOOM, ZoomButtons } from './zoom-buttons.tsx';
+import { buttonRoom, LEAST_ZOOM, MOST_ZOOM, noRoom, ZoomButtons } from './zoom-buttons.tsx';
 import './bench.css';
 
 export interface BenchDrawingProps {
@@ -111,23 +112,6 @@ function Drawing({ onOpen }: Required<BenchDrawingProps>) {
       {phone && !(narrow && wheelBelow) ? <FlowList tags={bench.screws} folded={wheelBelow} onOpen={onOpen} /> : <SpokenList />}
     </div>
   );
-}
-
-const layDown = () => useDocument.getState().takeInHand(null);
-const narrowContent = { tags: narrowTags, readings: narrowReadings };
-
-/** The narrow demo opens with its max. volume stop in hand, so that the wheel is there to be turned. */
-function useFirstInHand(narrow: boolean) {
-  useEffect(() => {
-    const { inHand, takeInHand } = useDocument.getState();
-    if (narrow && inHand === null) takeInHand('P1.maxVolumeStop');
-  }, [narrow]);
-}
-
-const noRoom = { width: 0, height: 0 };
-
-function buttonRoom(touch: boolean): { width: number; height: number } {
-  return touch ? { width: 196, height: 66 } : { width: 142, height: 48 };
 }
 
 interface FlowProps {

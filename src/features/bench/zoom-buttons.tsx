@@ -38,3 +38,10 @@ export function ZoomButtons({ zoom, touch, width, height, onZoom }: ZoomButtonsP
     </div>
   );
 }
+
+/** Pixels kept free for the buttons. */
+export const noRoom = { width: 0, height: 0 };
+
+export function buttonRoom(touch: boolean): { width: number; height: number } {
+  return touch ? { width: 196, height: 66 } : { width: 142, height: 48 };
+}
