@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import * as z from 'zod/mini';
 
 /** GET /api/health. Status 200 when everything answers, 503 when the database does not. */
 export const healthResponse = z.object({

@@ -1,11 +1,8 @@
-import { QueryClient, QueryClientProvider } from '@tanstack/react-query';
 import { type ReactNode, useEffect } from 'react';
 import { applyMotion, applyTheme } from '#src/lib/theme.ts';
 import { usePreferences } from '#src/stores/preferences-store.ts';
 
-const queryClient = new QueryClient({ defaultOptions: { queries: { retry: 1, refetchOnWindowFocus: false } } });
-
-/** What every screen stands on: server data, theme, motion and projector size. */
+/** What every screen stands on: theme, motion and projector size. */
 export function Providers({ children }: { readonly children: ReactNode }) {
   const theme = usePreferences((state) => state.theme);
   const motion = usePreferences((state) => state.motion);
@@ -15,5 +12,5 @@ export function Providers({ children }: { readonly children: ReactNode }) {
   useEffect(() => {
     document.documentElement.dataset.projector = String(projector);
   }, [projector]);
-  return <QueryClientProvider client={queryClient}>{children}</QueryClientProvider>;
+  return children;
 }

@@ -1,5 +1,7 @@
 import { AFTER_A_TRIP, HELD_RELIEF, LOAD_HOLDING, RELIEF_IS_THE_SAFETY_DEVICE, STANDING_CAUTION } from '#shared/findings/cautions.ts';
 import { SheetDialog } from '#src/components/dialog.tsx';
+import { ServerData } from '#src/components/server-data.tsx';
+import { ServerState } from './server-state.tsx';
 
 /** What the product is, and its cautions word for word. */
 export function AboutDialog({ onClose }: { readonly onClose: () => void }) {
@@ -29,6 +31,9 @@ export function AboutDialog({ onClose }: { readonly onClose: () => void }) {
       </ol>
       <h3 className="region-heading">On this device</h3>
       <p>The circuit in hand is kept in this browser and nowhere else. Save it as a file to keep it elsewhere.</p>
+      <ServerData>
+        <ServerState />
+      </ServerData>
     </SheetDialog>
   );
 }
