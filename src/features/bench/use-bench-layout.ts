@@ -86,7 +86,7 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
     const wishes = specs.flatMap((spec) => {
       if (narrow && !narrow.tags.includes(spec.address)) return [];
       const state = tagState(document, caseId, spec);
-      const chipText = state ? chipWords(format.quantity(state.value, spec.quantity), false) : '';
+      const chipText = state ? chipWords(format.quantity(state.value, spec.quantity), narrow !== null) : '';
       return state
         ? [{ spec, form: !narrow && isFull(document, spec, null) ? ('full' as const) : ('compact' as const), chipText, inHand: false }]
         : [];
@@ -126,7 +126,7 @@ export function useBenchLayout(document: CircuitDocument, caseId: string, option
       const state = sameContent(former.current.get(spec.address), now);
       former.current.set(spec.address, state);
       const form: TagForm = small ? 'chip' : !narrow && isFull(document, spec, inHand) ? 'full' : 'compact';
-      found.push({ spec, state, form, chip: chipWords(format.quantity(state.value, spec.quantity), small) });
+      found.push({ spec, state, form, chip: chipWords(format.quantity(state.value, spec.quantity), small || narrow !== null) });
     }
     return found;
   }, [specs, document, caseId, inHand, small, format, narrow]);
