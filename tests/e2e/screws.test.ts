@@ -45,8 +45,7 @@ describe('turning a screw', () => {
     journey({}, async ({ page, address }) => {
       const bench = await new BenchPage(page).open(address());
       await bench.screw(STOP).hover();
-      await page.mouse.wheel(0, 100);
-      await page.mouse.wheel(0, 100);
+      await Promise.all([page.mouse.wheel(0, 100), page.mouse.wheel(0, 100)]);
       await bench.tagSays(STOP, /^18\.0 cm³\/rev, 2½ turns in$/);
       await bench.settled();
       // Both notches are one step.
