@@ -158,6 +158,7 @@ export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true 
       data-lanes={lanes}
       data-narrow={isNarrow || undefined}
       data-stale={anyStale || undefined}
+      data-run-hash={model.cases[model.activeIndex]?.run?.hash}
       style={
         { '--tape-left': `${measures.left}px`, '--tape-band': `${Math.max(band.height, 2 * measures.rowHeight)}px` } as React.CSSProperties
       }
