@@ -12,6 +12,7 @@ import type { QuantityId } from '#shared/units/quantities.ts';
 import { fieldSpec, targetWord } from '#src/lib/field-specs.ts';
 import { ruleWords, type YardstickId, yardstickWords } from './explain-rules.ts';
 import { plateValue } from './plate-value.ts';
+import { wordsBefore } from './words-before.ts';
 
 export interface ExplainInput {
   readonly label: string;
@@ -181,13 +182,15 @@ function explainFinding(context: ExplainContext, id: string): Explained | null {
   const finding = context.assessment?.findings.find((entry) => entry.id === id);
   if (!finding) return null;
   const rule = ruleWords[finding.rule];
-  const figures = [...finding.headline, ...finding.cause].filter((part) => typeof part !== 'string');
+  const figures = [finding.headline, finding.cause].flatMap((phrase) =>
+    phrase.flatMap((part, index) => (typeof part === 'string' ? [] : [{ part, before: wordsBefore(phrase[index - 1]) }])),
+  );
   return {
     title: 'Finding',
     words: finding.headline,
     ...rule,
-    inputs: figures.map((part) => ({
-      label: part.address ? (channelLabel(context, part.address) ?? part.address) : 'Figure of this run',
+    inputs: figures.map(({ part, before }) => ({
+      label: part.address ? (channelLabel(context, part.address) ?? part.address) : before,
       value: [part],
       source: part.address ? sourceOf(context, part.address) : 'this run',
       address: part.address,
