@@ -12,7 +12,15 @@ export default defineConfig({
   html: { cspNonce: '__CSP_NONCE__' },
   worker: { format: 'es' },
   optimizeDeps: { include: ['odex'] },
-  build: { outDir: 'dist/client', emptyOutDir: true, assetsInlineLimit: 0, target: 'es2022', manifest: true },
+  build: {
+    outDir: 'dist/client',
+    emptyOutDir: true,
+    assetsInlineLimit: 0,
+    target: 'es2022',
+    manifest: true,
+    // Browsers that do not preload modules load them all the same.
+    modulePreload: { polyfill: false },
+  },
   server: { host: '127.0.0.1' },
   test: {
     projects: [

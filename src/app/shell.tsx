@@ -11,6 +11,8 @@ import { keepDraft } from './keep-draft.ts';
 /** Everything that is not on the first view. */
 const rest = [
   () => import('#src/components/menu.tsx'),
+  () => import('#src/features/tape/flag-editor.tsx'),
+  () => import('#src/features/tape/tape-menus.tsx'),
   () => import('#src/features/nameplate/nameplate-layer.tsx'),
   () => import('#src/features/nameplate/explain-panel.tsx'),
   () => import('#src/features/settings/units-dialog.tsx'),

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { journey, PATIENCE, says, seen, textOf } from '#tests/support/browser.ts';
+import { gone, journey, PATIENCE, says, seen, textOf } from '#tests/support/browser.ts';
 import { BenchPage } from './pages/bench-page.ts';
 
 describe('scrubbing the tape', () => {
@@ -89,6 +89,21 @@ describe('scrubbing the tape', () => {
       await expect.poll(async () => Math.abs((await bench.time()) - 2.1)).toBeLessThan(0.1);
       await seen(page.getByRole('table', { name: /^Readings at 2\.1/ }));
       await seen(page.getByRole('table', { name: /^By phase, case B/ }));
+    }));
+
+  it('opens a flag, takes another moment and gives the focus back', () =>
+    journey({}, async ({ page, address }) => {
+      const bench = await new BenchPage(page).open(address());
+      await bench.tape.getByRole('button', { name: /^Command Solenoid a on/ }).press('Enter');
+      const sheet = bench.tape.getByRole('dialog', { name: /^Command/ });
+      const field = sheet.getByRole('textbox', { name: 'Time' });
+      await field.fill('0.9 s');
+      await field.press('Enter');
+      const flag = bench.tape.getByRole('button', { name: 'Command Solenoid a on at 0.90 s' });
+      await seen(flag);
+      await page.keyboard.press('Escape');
+      await gone(sheet);
+      await expect.poll(() => flag.evaluate((element) => element === document.activeElement)).toBe(true);
     }));
 
   it('moves a flag by the keyboard and the runs follow', () =>

@@ -1,12 +1,14 @@
-import { useEffect } from 'react';
+import { Suspense, useEffect } from 'react';
 import type { CircuitDocument } from '#shared/circuit/schema.ts';
 import { tracesToCsv } from '#shared/pictures/traces-csv.ts';
+import { later } from '#src/components/later.ts';
 import { useFormat } from '#src/components/use-format.ts';
 import { fileName, saveFile } from '#src/lib/save-file.ts';
 import { useLaneChoice } from './lane-store.ts';
 import { tapeSvg } from './tape-export.ts';
-import { LaneMenu } from './tape-menus.tsx';
 import type { TapeModel } from './tape-model.ts';
+
+const LaneMenu = later(async () => (await import('./tape-menus.tsx')).LaneMenu);
 
 /** Which sheet of the tape is open. */
 export type TapeSheet = 'lanes' | 'table' | 'save' | 'flag' | null;
@@ -84,7 +86,9 @@ export function TapeFoot({ document, model, sheet, onSheet, room, isNarrow }: Ta
       </div>
       {sheet === 'lanes' && (
         <section className="tape-sheet" aria-label="Lanes">
-          <LaneMenu document={document} run={run} shown={model.lanes.map((lane) => lane.lane.address)} most={room} onChoose={setChosen} />
+          <Suspense fallback={null}>
+            <LaneMenu document={document} run={run} shown={model.lanes.map((lane) => lane.lane.address)} most={room} onChoose={setChosen} />
+          </Suspense>
           {isNarrow && saving}
         </section>
       )}

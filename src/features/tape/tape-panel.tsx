@@ -1,16 +1,16 @@
-import { useCallback, useMemo, useRef, useState } from 'react';
+import { Suspense, useCallback, useMemo, useRef, useState } from 'react';
 import { addCommand, moveCommand, removeCommand } from '#shared/circuit/edit/duty.ts';
 import { commandWords, shortWords } from '#shared/duty/command-words.ts';
 import { kindOf } from '#shared/kinds/registry.ts';
 import { tapeBand } from '#shared/pictures/tape-band.ts';
 import { pinsOf } from '#shared/pictures/tape-pins.ts';
+import { later } from '#src/components/later.ts';
 import { useFormat } from '#src/components/use-format.ts';
 import { useLayout } from '#src/lib/layout.ts';
 import { useSize } from '#src/lib/use-size.ts';
 import { useCursor } from '#src/stores/cursor-store.ts';
 import { useDocument } from '#src/stores/document-store.ts';
 import { EventTable } from './event-table.tsx';
-import { FlagEditor } from './flag-editor.tsx';
 import { useLaneChoice } from './lane-store.ts';
 import { RunControls } from './run-controls.tsx';
 import { TapeAxis } from './tape-axis.tsx';
@@ -19,7 +19,6 @@ import { TapeFoot, type TapeSheet } from './tape-foot.tsx';
 import { timeScale, type Vertical } from './tape-geometry.ts';
 import { planTape, tapeMeasures } from './tape-layout.ts';
 import { TapeMarks } from './tape-marks.tsx';
-import { AddFlagMenu } from './tape-menus.tsx';
 import { showIn } from './tape-model.ts';
 import { TapePlot } from './tape-plot.tsx';
 import { usePlayback } from './use-playback.ts';
@@ -29,6 +28,9 @@ import './tape.css';
 import './tape-band.css';
 import './tape-lanes.css';
 import './tape-sheets.css';
+
+const AddFlagMenu = later(async () => (await import('./tape-menus.tsx')).AddFlagMenu);
+const FlagEditor = later(async () => (await import('./flag-editor.tsx')).FlagEditor);
 
 /** Gives the focus back to a flag once its sheet is gone. */
 function focusFlag(id: string) {
@@ -206,32 +208,36 @@ export function TapePanel({ lanes = 5, findings = [], onFinding, canEdit = true 
       <EventTable document={document} model={model} findings={findings} visible={sheet === 'table'} />
       {sheet === 'flag' && (
         <section className="tape-sheet tape-sheet-right" aria-label="Add a flag">
-          <AddFlagMenu
-            document={document}
-            onAdd={(offer) => {
-              const time = Math.min(useCursor.getState().time, document.duty.duration);
-              const added = addCommand(document, { ...offer, time: Math.round(time * 100) / 100, label: '' });
-              if (added.id) {
-                edit((now) => addCommand(now, { ...offer, time: Math.round(time * 100) / 100, label: '' }).document);
-                setEditing(added.id);
-              }
-              setSheet(null);
-            }}
-          />
+          <Suspense fallback={null}>
+            <AddFlagMenu
+              document={document}
+              onAdd={(offer) => {
+                const time = Math.min(useCursor.getState().time, document.duty.duration);
+                const added = addCommand(document, { ...offer, time: Math.round(time * 100) / 100, label: '' });
+                if (added.id) {
+                  edit((now) => addCommand(now, { ...offer, time: Math.round(time * 100) / 100, label: '' }).document);
+                  setEditing(added.id);
+                }
+                setSheet(null);
+              }}
+            />
+          </Suspense>
         </section>
       )}
       {command && (
-        <FlagEditor
-          key={command.id}
-          document={document}
-          command={command}
-          left={Math.min(Math.max(measures.left + x(command.time) - 20, 4), Math.max(4, size.width + measures.left - 330))}
-          onEdit={edit}
-          onClose={() => {
-            setEditing(null);
-            focusFlag(command.id);
-          }}
-        />
+        <Suspense fallback={null}>
+          <FlagEditor
+            key={command.id}
+            document={document}
+            command={command}
+            left={Math.min(Math.max(measures.left + x(command.time) - 20, 4), Math.max(4, size.width + measures.left - 330))}
+            onEdit={edit}
+            onClose={() => {
+              setEditing(null);
+              focusFlag(command.id);
+            }}
+          />
+        </Suspense>
       )}
     </section>
   );
