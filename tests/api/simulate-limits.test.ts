@@ -1,4 +1,5 @@
 import { afterEach, beforeAll, expect, inject, test } from 'vitest';
+import { crowdedCircuit } from '#shared/circuit/samples/crowded.ts';
 import { demoCircuit } from '#shared/circuit/samples/demo.ts';
 import { post, refusal } from '../support/ask.ts';
 import { createTestDatabase } from '../support/database.ts';
@@ -16,23 +17,23 @@ async function start(options: Omit<TestServerOptions, 'databaseUrl'>): Promise<s
   return `${server.url}/api/simulate`;
 }
 
-/** The demo's duty over and over for an hour: far more work than these limits allow. */
+/** The crowded sheet's duty over and over for an hour: far more work than these limits allow. */
 function anHour() {
-  const { duty } = demoCircuit;
+  const { duty } = crowdedCircuit;
   const again = Math.floor(400 / duty.commands.length);
   const commands = Array.from({ length: again }, (_, round) =>
     duty.commands.map((command) => ({ ...command, id: `${command.id}-${round}`, time: command.time + round * duty.duration })),
   ).flat();
   return {
-    document: { ...demoCircuit, cases: demoCircuit.cases.slice(0, 1), duty: { ...duty, duration: 3600, commands } },
+    document: { ...crowdedCircuit, cases: crowdedCircuit.cases.slice(0, 1), duty: { ...duty, duration: 3600, commands } },
     tolerance: 'fine',
   };
 }
 
 test('a run that takes too long is given up with a sentence, and the next one runs', async () => {
-  const url = await start({ pool: { threads: 1, timeLimit: 6000 } });
+  const url = await start({ pool: { threads: 1, timeLimit: 3000 } });
   const error = await refusal(await post(url, anHour()), 503, 'too-slow');
-  expect(error.message).toMatch(/After 6 s of computing the run had reached [0-9.]+ s of 3600 s.*shorten the duty/);
+  expect(error.message).toMatch(/After 3 s of computing the run had reached [0-9.]+ s of 3600 s.*shorten the duty/);
   expect((await post(url, { document: demoCircuit, tolerance: 'draft' })).status).toBe(200);
 });
 
